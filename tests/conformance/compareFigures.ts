@@ -30,10 +30,12 @@ export function compareFigures(got: unknown, expected: unknown, tolerance: Toler
   if (typeof expected === 'number') return isClose(got, expected, tolerance, key) ? [] : [{ key, got, expected }]
   if (Array.isArray(expected)) return compareLists(got, expected, tolerance, key)
   if (isRecord(expected)) return compareRecords(got, expected, tolerance, key)
-  if (typeof expected === 'string' && tolerance.text !== undefined) {
-    return typeof got === 'string' && meansTheSame(got, expected) ? [] : [{ key, got, expected }]
-  }
-  return got === expected ? [] : [{ key, got, expected }]
+  const same = typeof expected === 'string' ? isSameText(got, expected, tolerance) : got === expected
+  return same ? [] : [{ key, got, expected }]
+}
+
+function isSameText(got: unknown, expected: string, { text }: Tolerance): boolean {
+  return got === expected || (text !== undefined && typeof got === 'string' && meansTheSame(got, expected))
 }
 
 function isClose(got: unknown, expected: number, { rel = 0, abs = 0, note }: Tolerance, key: string): boolean {
