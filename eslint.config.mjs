@@ -6,6 +6,7 @@ import tseslint from 'typescript-eslint'
 /** Who may not know whom: target folder → the folders it must not import. */
 const forbidden = {
   shared: ['app', 'components', 'db', 'sync', 'server', 'tests'],
+  'shared/schemas': ['shared/api', 'shared/messages'],
   'shared/compute': ['shared/schemas', 'shared/api', 'shared/messages'],
   db: ['app', 'components', 'sync', 'server', 'tests'],
   sync: ['app', 'components', 'server', 'tests'],

@@ -1,7 +1,7 @@
 import { z } from 'zod'
+import { editionForDevice } from '@/shared/schemas/factorBook'
 import { id, moment } from '@/shared/schemas/primitives'
 import { change, mutationOutcome, PULL_LIMIT, PUSH_LIMIT } from '@/shared/schemas/sync'
-import { editionForDevice } from './factorBook'
 import { defineEndpoint, nothing } from './defineEndpoint'
 
 /**

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { problem } from '@/shared/api/problem'
+import { problem } from './problem'
 import { outline } from './outline'
 import { areaGeometry, id, moment } from './primitives'
 import { photoMeta, PHOTO_STATES, sheetAnswers, sheetReview } from './sheet'

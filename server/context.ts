@@ -1,0 +1,18 @@
+import type { Logger } from 'pino'
+import type { Config } from './config'
+import type { Database } from './database'
+import type { Queue } from './jobs/queue'
+import type { Mailer } from './mail/mailer'
+import type { PhotoStore } from './photos/photoStore'
+
+/** What every route and job works with; made once in main.ts, or by a test. */
+export interface Context {
+  readonly config: Config
+  readonly database: Database
+  readonly mailer: Mailer
+  readonly queue: Queue
+  readonly photoStore: PhotoStore
+  readonly log: Logger
+  /** The server's clock. Device clocks never order anything. */
+  readonly now: () => Date
+}
