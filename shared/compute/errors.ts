@@ -19,6 +19,10 @@ export type ComputeErrorCode =
   | 'not-converged'
   | 'undefined-statistic'
   | 'ring-invalid'
+  | 'ring-too-short'
+  | 'ring-crosses-itself'
+  | 'coordinates-swapped'
+  | 'coordinates-projected'
   | 'coordinates-out-of-range'
   | 'unknown-code'
 
