@@ -17,8 +17,11 @@ const files = readdirSync(FOLDER, { recursive: true, encoding: 'utf8' })
 const examplesOf = new Map(files.map((name) => [name, readExamples(readFileSync(path.join(FOLDER, name), 'utf8'))]))
 const scopeOfAll: Record<string, unknown> = {}
 const scopeOf = new Map<string, Record<string, unknown>>()
+const unloaded: string[] = []
 for (const name of files) {
-  const exported: unknown = await import(pathToFileURL(path.join(FOLDER, name)).href)
+  const exported: unknown = await import(pathToFileURL(path.join(FOLDER, name)).href).catch((fault: unknown) => {
+    unloaded.push(`${name}: ${String(fault)}`)
+  })
   scopeOf.set(name, { ...(exported ?? {}) })
   Object.assign(scopeOfAll, exported)
 }
@@ -89,6 +92,10 @@ describe.each(files.filter((name) => (examplesOf.get(name) ?? []).length > 0))('
 
     expect(agrees(got, wanted), `got ${JSON.stringify(got)}`).toBe(true)
   })
+})
+
+it('loads every module', () => {
+  expect(unloaded).toEqual([])
 })
 
 it('finds examples to run', () => {
