@@ -21,7 +21,21 @@ const zones = Object.entries(forbidden).map(([target, from]) => ({
   from: from.map((folder) => `./${folder}`),
   message: `${target}/ must not know ${from.join(', ')}.`,
 }))
-const features = ['sheet', 'street', 'bag', 'today', 'review', 'stock', 'flows', 'factors', 'rounds', 'loads', 'people', 'district', 'me']
+const features = [
+  'sheet',
+  'street',
+  'bag',
+  'today',
+  'review',
+  'stock',
+  'flows',
+  'factors',
+  'rounds',
+  'loads',
+  'people',
+  'district',
+  'me',
+]
 for (const feature of features) {
   zones.push({
     target: `./components/${feature}`,
@@ -30,11 +44,28 @@ for (const feature of features) {
   })
 }
 
-const serverOnly = ['sequelize', 'express', 'pg', 'umzug', 'pg-boss', 'nodemailer', 'multer', 'jimp', 'passport', 'passport-*']
+const serverOnly = [
+  'sequelize',
+  'express',
+  'pg',
+  'umzug',
+  'pg-boss',
+  'nodemailer',
+  'multer',
+  'jimp',
+  'passport',
+  'passport-*',
+]
 const noBarrels = { selector: 'ExportAllDeclaration', message: 'No barrels: import from the file that holds it.' }
 const noClock = [
-  { selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']", message: 'Randomness is an argument.' },
-  { selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']", message: 'The clock is an argument.' },
+  {
+    selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']",
+    message: 'Randomness is an argument.',
+  },
+  {
+    selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']",
+    message: 'The clock is an argument.',
+  },
 ]
 
 export default tseslint.config(
@@ -51,7 +82,15 @@ export default tseslint.config(
       'import-x/no-restricted-paths': ['error', { zones }],
       'import-x/no-cycle': ['error', { maxDepth: 8 }],
       'import-x/no-default-export': 'error',
-      'no-restricted-imports': ['error', { patterns: [{ group: [...serverOnly, 'node:*'], message: 'Only server/ and tests/ use these.' }, { regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] }],
+      'no-restricted-imports': [
+        'error',
+        {
+          patterns: [
+            { group: [...serverOnly, 'node:*'], message: 'Only server/ and tests/ use these.' },
+            { regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' },
+          ],
+        },
+      ],
       'no-restricted-globals': ['error', { name: 'fetch', message: 'Only sync/ and tests/ are on the network.' }],
       'no-restricted-syntax': ['error', noBarrels],
       'react-hooks/rules-of-hooks': 'error',
@@ -66,27 +105,55 @@ export default tseslint.config(
   },
   {
     files: ['app/**/*.tsx', 'components/**/*.tsx'],
-    rules: { 'max-lines-per-function': ['error', { max: 150, skipBlankLines: true, skipComments: true }], complexity: ['error', 15] },
+    rules: {
+      'max-lines-per-function': ['error', { max: 150, skipBlankLines: true, skipComments: true }],
+      complexity: ['error', 15],
+    },
   },
   { files: ['app/**/*.tsx', '*.config.{ts,mjs,js}'], rules: { 'import-x/no-default-export': 'off' } },
   {
     files: ['shared/compute/**/*.ts'],
     ignores: ['**/*.test.ts'],
     rules: {
-      'no-restricted-imports': ['error', { patterns: [{ regex: '^(?!\\./|@/shared/compute/|@stdlib/|h3-js$|geographiclib-geodesic$)', message: 'shared/compute imports only its own and its special functions.' }] }],
+      'no-restricted-imports': [
+        'error',
+        {
+          patterns: [
+            {
+              regex: '^(?!\\./|@/shared/compute/|@stdlib/|h3-js$|geographiclib-geodesic$)',
+              message: 'shared/compute imports only its own and its special functions.',
+            },
+          ],
+        },
+      ],
       'no-restricted-syntax': ['error', noBarrels, ...noClock],
       complexity: ['error', 15],
     },
   },
-  { files: ['shared/**/*.ts'], ignores: ['shared/compute/**', '**/*.test.ts'], rules: { 'no-restricted-syntax': ['error', noBarrels, ...noClock] } },
-  { files: ['server/**/*.ts', 'tests/**/*.ts', 'tests/**/*.tsx', '*.config.ts'], rules: { 'no-restricted-imports': ['error', { patterns: [{ regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] }] } },
+  {
+    files: ['shared/**/*.ts'],
+    ignores: ['shared/compute/**', '**/*.test.ts'],
+    rules: { 'no-restricted-syntax': ['error', noBarrels, ...noClock] },
+  },
+  {
+    files: ['server/**/*.ts', 'tests/**/*.ts', 'tests/**/*.tsx', '*.config.ts'],
+    rules: {
+      'no-restricted-imports': [
+        'error',
+        { patterns: [{ regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] },
+      ],
+    },
+  },
   { files: ['sync/**/*.ts', 'tests/**/*.ts'], rules: { 'no-restricted-globals': 'off' } },
   {
     files: ['**/*.test.{ts,tsx}', 'tests/**/*.ts'],
     rules: {
       'max-lines': ['error', { max: 500, skipBlankLines: true, skipComments: true }],
       'max-lines-per-function': 'off',
-      'no-restricted-imports': ['error', { patterns: [{ regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] }],
+      'no-restricted-imports': [
+        'error',
+        { patterns: [{ regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] },
+      ],
       'no-restricted-globals': 'off',
     },
   },

@@ -20,7 +20,13 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
-          include: ['shared/**/*.test.ts', 'sync/**/*.test.ts', 'db/**/*.test.ts', 'tests/conformance/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+          include: [
+            'shared/**/*.test.ts',
+            'sync/**/*.test.ts',
+            'db/**/*.test.ts',
+            'tests/conformance/**/*.test.ts',
+            'tests/architecture/**/*.test.ts',
+          ],
           testTimeout: 30_000,
         },
       },

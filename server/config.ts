@@ -1,9 +1,7 @@
 import path from 'node:path'
 import { z } from 'zod'
 
-const flag = z
-  .enum(['true', 'false', '1', '0'])
-  .transform((text) => text === 'true' || text === '1')
+const flag = z.enum(['true', 'false', '1', '0']).transform((text) => text === 'true' || text === '1')
 
 /** Every setting of the server, read once from the environment. README lists them with their defaults. */
 const settings = z.object({
@@ -21,7 +19,10 @@ const settings = z.object({
   WEB_ROOT: z.string().optional(),
   PHOTO_ROOT: z.string().default('.local/photos'),
   /** smtp:// or smtps:// of the mail server; without it a local sink keeps messages (never in production). */
-  MAIL_URL: z.string().regex(/^smtps?:\/\//).optional(),
+  MAIL_URL: z
+    .string()
+    .regex(/^smtps?:\/\//)
+    .optional(),
   MAIL_FROM: z.string().default('Tallystone <no-reply@tallystone.invalid>'),
   /** Opens /dev/mail; refused in production. */
   DEV_MAIL: flag.default(false),
@@ -64,7 +65,9 @@ export function readConfig(environment: NodeJS.ProcessEnv): Config {
   const parsed = settings.safeParse(environment)
   if (!parsed.success) {
     const lines = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`)
-    throw new ConfigError(`These settings cannot be used:\n${lines.join('\n')}\nNothing was started. README.md lists every setting.`)
+    throw new ConfigError(
+      `These settings cannot be used:\n${lines.join('\n')}\nNothing was started. README.md lists every setting.`,
+    )
   }
   const values = parsed.data
   if (values.NODE_ENV === 'production' && values.DEV_MAIL) {

@@ -16,11 +16,14 @@ export class Refusal extends Error {
   }
 }
 
-export const notFound = (what: string) => new Refusal(404, 'not-found', `There is no such ${what}, or it is not yours to see.`)
+export const notFound = (what: string) =>
+  new Refusal(404, 'not-found', `There is no such ${what}, or it is not yours to see.`)
 export const forbidden = (why: string) => new Refusal(403, 'forbidden', why)
-export const notSignedIn = () => new Refusal(401, 'not-signed-in', 'Sign in to go on. What is kept on this device is safe.')
+export const notSignedIn = () =>
+  new Refusal(401, 'not-signed-in', 'Sign in to go on. What is kept on this device is safe.')
 export const conflictWith = (code: string, detail: string) => new Refusal(409, code, detail)
-export const unusable = (detail: string, faults: readonly Fault[]) => new Refusal(422, 'input-not-usable', detail, faults)
+export const unusable = (detail: string, faults: readonly Fault[]) =>
+  new Refusal(422, 'input-not-usable', detail, faults)
 
 /** The wire shape of a refusal. */
 export function toProblem(refusal: Refusal, requestId?: string): Problem {

@@ -51,7 +51,13 @@ export const loadsAhead = z.object({
   /** Materials without a bulk density or code: their mass is named, not hidden. */
   unassigned: z.array(z.object({ material, massKg: z.number() })),
   densities: z.array(
-    z.object({ code: z.string(), lowKgPerM3: z.number(), highKgPerM3: z.number(), source: z.string(), provenance: z.string() }),
+    z.object({
+      code: z.string(),
+      lowKgPerM3: z.number(),
+      highKgPerM3: z.number(),
+      source: z.string(),
+      provenance: z.string(),
+    }),
   ),
   basis: z.object({
     computedCount: z.number().int(),

@@ -87,7 +87,12 @@ export const checkSheets = defineEndpoint({
   summary: 'Accept sheets as they were seen; one that changed meanwhile is left and named.',
   params: nothing,
   query: nothing,
-  body: z.object({ sheets: z.array(z.object({ sheetId: id, change: z.number().int() })).min(1).max(5_000) }),
+  body: z.object({
+    sheets: z
+      .array(z.object({ sheetId: id, change: z.number().int() }))
+      .min(1)
+      .max(5_000),
+  }),
   response: z.object({ checkedIds: z.array(id), changedMeanwhileIds: z.array(id) }),
 })
 

@@ -75,7 +75,10 @@ export const createRound = defineEndpoint({
   query: nothing,
   body: z
     .object({ name: typedText(120).min(1), districtId: id, startsOn: calendarDay, endsOn: calendarDay })
-    .refine((round) => round.startsOn <= round.endsOn, { error: 'a round cannot end before it starts', path: ['endsOn'] }),
+    .refine((round) => round.startsOn <= round.endsOn, {
+      error: 'a round cannot end before it starts',
+      path: ['endsOn'],
+    }),
   response: roundWithBeats,
   status: 201,
 })

@@ -1,12 +1,5 @@
 import { z } from 'zod'
-import {
-  AREA_BASES,
-  COMPONENTS,
-  MATERIALS,
-  PROVENANCES,
-  STRUCTURES,
-  USES,
-} from '@/shared/compute/factors/vocabulary'
+import { AREA_BASES, COMPONENTS, MATERIALS, PROVENANCES, STRUCTURES, USES } from '@/shared/compute/factors/vocabulary'
 import { id, moment } from './primitives'
 
 export const provenance = z.enum(PROVENANCES)

@@ -28,7 +28,10 @@ function hasControlCharacter(text: string): boolean {
   return false
 }
 
-export const email = z.email().max(254).transform((address) => address.trim().toLowerCase())
+export const email = z
+  .email()
+  .max(254)
+  .transform((address) => address.trim().toLowerCase())
 
 /** Fifteen characters advised, eight the least, nothing cut off. */
 export const password = z.string().min(8).max(200)
