@@ -1,5 +1,6 @@
 import { QueryTypes, Sequelize } from 'sequelize'
 import { SequelizeStorage, Umzug } from 'umzug'
+import { installQueue, QUEUE_SCHEMA } from './jobs/installQueue'
 import { allMigrations } from './migrations/allMigrations'
 
 /**
@@ -11,6 +12,7 @@ export async function migrate(ownerUrl: string): Promise<string[]> {
   return withOwner(ownerUrl, async (sequelize) => {
     const taken = await makeUmzug(sequelize).up()
     await sequelize.query('GRANT SELECT ON schema_step TO tallystone_app', { type: QueryTypes.RAW })
+    await installQueue(ownerUrl, sequelize)
     return taken.map((step) => step.name)
   })
 }
@@ -19,6 +21,7 @@ export async function migrate(ownerUrl: string): Promise<string[]> {
 export async function migrateDown(ownerUrl: string): Promise<void> {
   await withOwner(ownerUrl, async (sequelize) => {
     await makeUmzug(sequelize).down({ to: 0 })
+    await sequelize.query(`DROP SCHEMA IF EXISTS ${QUEUE_SCHEMA} CASCADE`, { type: QueryTypes.RAW })
   })
 }
 

@@ -1,6 +1,7 @@
 import type { ErrorRequestHandler, RequestHandler } from 'express'
 import type { Logger } from 'pino'
 import { notFound, Refusal, toProblem } from '@/server/errors'
+import { describeFault } from './describeFault'
 
 /** Every unknown address below the API is one problem. */
 export const unknownAddress: RequestHandler = (_request, _response, next) => next(notFound('address'))
@@ -10,7 +11,8 @@ export function answerProblem(log: Logger): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
     if (response.headersSent) return next(error)
     const refusal = asRefusal(error)
-    if (refusal.status >= 500) log.error({ requestId: request.requestId, fault: describe(error) }, 'request failed')
+    if (refusal.status >= 500)
+      log.error({ requestId: request.requestId, fault: describeFault(error) }, 'request failed')
     response
       .status(refusal.status)
       .set(refusal.headers)
@@ -21,14 +23,23 @@ export function answerProblem(log: Logger): ErrorRequestHandler {
 
 function asRefusal(error: unknown): Refusal {
   if (error instanceof Refusal) return error
-  const { type, status } = (typeof error === 'object' && error !== null ? error : {}) as { type?: string; status?: number }
-  if (type === 'entity.too.large') return new Refusal(413, 'body-too-large', 'The request is larger than the server takes. Nothing was changed; send less at once.')
-  if (type === 'entity.parse.failed') return new Refusal(400, 'body-not-readable', 'The body is not JSON that can be read. Nothing was changed.')
-  if (status !== undefined && status >= 400 && status < 500) return new Refusal(status, 'request-refused', 'The request cannot be read. Nothing was changed.')
-  return new Refusal(500, 'fault-of-ours', 'The server failed at this. Nothing was changed; try again, and tell your steward the request number if it stays.')
-}
-
-function describe(error: unknown): { name: string; message: string; stack: string | undefined } {
-  if (!(error instanceof Error)) return { name: 'unknown', message: String(error), stack: undefined }
-  return { name: error.name, message: error.message, stack: error.stack }
+  const { type, status } = (typeof error === 'object' && error !== null ? error : {}) as {
+    type?: string
+    status?: number
+  }
+  if (type === 'entity.too.large')
+    return new Refusal(
+      413,
+      'body-too-large',
+      'The request is larger than the server takes. Nothing was changed; send less at once.',
+    )
+  if (type === 'entity.parse.failed')
+    return new Refusal(400, 'body-not-readable', 'The body is not JSON that can be read. Nothing was changed.')
+  if (status !== undefined && status >= 400 && status < 500)
+    return new Refusal(status, 'request-refused', 'The request cannot be read. Nothing was changed.')
+  return new Refusal(
+    500,
+    'fault-of-ours',
+    'The server failed at this. Nothing was changed; try again, and tell your steward the request number if it stays.',
+  )
 }

@@ -1,7 +1,8 @@
 import { m0001People } from './m0001People'
 import { m0002Field } from './m0002Field'
 import { m0003Planning } from './m0003Planning'
+import { m0004Sessions } from './m0004Sessions'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
-export const allMigrations: readonly Migration[] = [m0001People, m0002Field, m0003Planning]
+export const allMigrations: readonly Migration[] = [m0001People, m0002Field, m0003Planning, m0004Sessions]

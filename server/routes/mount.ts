@@ -61,7 +61,11 @@ function requireAudience(endpoint: Endpoint): RequestHandler {
     if (endpoint.audience === 'signed-in') return next()
     const roles = request.signedIn.roles
     if (endpoint.audience.some((role) => roles.includes(role))) return next()
-    next(forbidden(`This needs the role ${endpoint.audience.join(' or ')}. Ask a steward of ${request.signedIn.organisationName}.`))
+    next(
+      forbidden(
+        `This needs the role ${endpoint.audience.join(' or ')}. Ask a steward of ${request.signedIn.organisationName}.`,
+      ),
+    )
   }
 }
 
@@ -78,7 +82,10 @@ function parseInput<E extends Endpoint>(endpoint: E, request: Request): Endpoint
     body: read('body', request.body ?? {}),
   }
   if (faults.length > 0) {
-    throw unusable(`${faults.length === 1 ? 'One value' : `${faults.length} values`} cannot be used; nothing was changed.`, faults)
+    throw unusable(
+      `${faults.length === 1 ? 'One value' : `${faults.length} values`} cannot be used; nothing was changed.`,
+      faults,
+    )
   }
   return parsed as EndpointParsed<E>
 }

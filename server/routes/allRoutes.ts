@@ -1,0 +1,6 @@
+import type { Router } from 'express'
+import type { Context } from '@/server/context'
+import { healthRoutes } from './health/healthRoutes'
+
+/** The routes of every resource; each knows its endpoints of the contract. */
+export const allRoutes: readonly ((context: Context) => Router)[] = [healthRoutes]
