@@ -17,7 +17,7 @@ export interface RingMeasures {
  * @param ring corners [°], closed or open, at least three different ones; longitudes beyond 180° are taken round
  * @returns area [m²] and perimeter [m], neither negative, and the sense of rotation seen from above
  * @throws {ComputeError} `ring-too-short`, `not-a-number`, `coordinates-out-of-range`
- * @remarks Accuracy about 0.1 m² per corner at any size (round-off of the method); about 40 µs a building.
+ * @remarks Accuracy about 0.1 m² per corner at any size (round-off of the method); about 20 µs a building.
  * @see Karney, C. F. F. (2013). Algorithms for geodesics. Journal of Geodesy 87, 43–55, section 6.
  * @example
  * geodesicArea([[0, 90], [0, 0], [90, 0]]).areaM2 // => 63758202715511.055
