@@ -21,6 +21,8 @@ const zones = Object.entries(forbidden).map(([target, from]) => ({
   from: from.map((folder) => `./${folder}`),
   message: `${target}/ must not know ${from.join(', ')}.`,
 }))
+/** A test stands beside its code and may use what tests/support builds. */
+const withoutTests = (zone) => ({ ...zone, from: zone.from.filter((folder) => folder !== './tests') })
 const features = [
   'sheet',
   'street',
@@ -150,6 +152,10 @@ export default tseslint.config(
     rules: {
       'max-lines': ['error', { max: 500, skipBlankLines: true, skipComments: true }],
       'max-lines-per-function': 'off',
+      'import-x/no-restricted-paths': [
+        'error',
+        { zones: zones.map(withoutTests).filter(({ from }) => from.length > 0) },
+      ],
       'no-restricted-imports': [
         'error',
         { patterns: [{ regex: '^\\.\\./', message: 'Use @/ for anything outside this folder.' }] },
