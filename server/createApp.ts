@@ -8,6 +8,7 @@ import { authenticate } from './middleware/authenticate'
 import { answerProblem, unknownAddress } from './middleware/problems'
 import { securityHeaders } from './middleware/securityHeaders'
 import { allRoutes } from './routes/allRoutes'
+import { devMailRoutes } from './routes/devMail/devMailRoutes'
 import { serveWeb } from './routes/serveWeb'
 
 /** The Express app without listening: what main.ts serves and what tests drive. */
@@ -36,6 +37,7 @@ export function createApp(context: Context): Express {
   api.use(unknownAddress)
 
   app.use([API_PREFIX, '/api'], api)
+  if (context.config.hasDevMail) app.use('/dev/mail', devMailRoutes(context))
   app.use(serveWeb(context))
   app.use(answerProblem(context.log))
   return app

@@ -2,6 +2,7 @@ import type { Router } from 'express'
 import type { Context } from '@/server/context'
 import { authRoutes } from './auth/authRoutes'
 import { healthRoutes } from './health/healthRoutes'
+import { peopleRoutes } from './people/peopleRoutes'
 
 /** The routes of every resource; each knows its endpoints of the contract. */
-export const allRoutes: readonly ((context: Context) => Router)[] = [healthRoutes, authRoutes]
+export const allRoutes: readonly ((context: Context) => Router)[] = [healthRoutes, authRoutes, peopleRoutes]
