@@ -112,7 +112,10 @@ export default tseslint.config(
       complexity: ['error', 15],
     },
   },
-  { files: ['app/**/*.tsx', '*.config.{ts,mjs,js}'], rules: { 'import-x/no-default-export': 'off' } },
+  {
+    files: ['app/**/*.tsx', '*.config.{ts,mjs,js}', 'tests/support/e2e.global.ts'],
+    rules: { 'import-x/no-default-export': 'off' },
+  },
   {
     files: ['shared/compute/**/*.ts'],
     ignores: ['**/*.test.ts'],

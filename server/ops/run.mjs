@@ -10,6 +10,14 @@ export class CommandError extends Error {
   }
 }
 
+/** Programs that run now. */
+const running = new Set()
+
+/** Ends what {@link run} has started and not yet seen ending; for when we are told to stop. */
+export function endRunning() {
+  for (const child of running) child.kill('SIGTERM')
+}
+
 /**
  * Runs a program to its end and gives back what it said.
  *
@@ -27,6 +35,7 @@ export function run(program, args, { cwd, env, input, log } = {}) {
       env: { ...process.env, ...env },
       stdio: [input === undefined ? 'ignore' : 'pipe', 'pipe', 'pipe'],
     })
+    running.add(child)
     let output = ''
     let everything = ''
     const take = (isOutput) => (chunk) => {
@@ -38,9 +47,11 @@ export function run(program, args, { cwd, env, input, log } = {}) {
     child.stdout.on('data', take(true))
     child.stderr.on('data', take(false))
     child.once('error', (error) => reject(new CommandError(program, undefined, error.message)))
-    child.once('close', (code) =>
-      code === 0 ? resolve(output) : reject(new CommandError([program, ...args].join(' '), code, everything)),
-    )
+    child.once('close', (code) => {
+      running.delete(child)
+      if (code === 0) resolve(output)
+      else reject(new CommandError([program, ...args].join(' '), code, everything))
+    })
     if (input !== undefined) {
       child.stdin.on('error', () => {})
       child.stdin.end(input)

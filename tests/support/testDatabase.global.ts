@@ -1,4 +1,5 @@
 import type { TestProject } from 'vitest/node'
+import { migrate } from '@/server/migrate'
 import { startThrowAwayCluster } from '@/server/ops/throwAwayCluster.mjs'
 import { dropTemplate, prepareTestServer, type TestDatabaseServer } from './testDatabaseServer'
 
@@ -17,7 +18,7 @@ let close = async () => {}
 export async function setup({ provide }: Pick<TestProject, 'provide'>): Promise<void> {
   const given = process.env.TEST_DATABASE_ADMIN_URL
   const cluster = given ? { adminUrl: given, stop: async () => {} } : await startThrowAwayCluster()
-  const server = await prepareTestServer(cluster.adminUrl)
+  const server = await prepareTestServer(cluster.adminUrl, ({ ownerUrl }) => migrate(ownerUrl))
   provide('testDatabaseServer', server)
   close = async () => {
     await dropTemplate(server)

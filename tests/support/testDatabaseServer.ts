@@ -1,6 +1,5 @@
 import { createHash, randomBytes } from 'node:crypto'
 import { Client } from 'pg'
-import { migrate } from '@/server/migrate'
 
 const OWNER = 'tallystone_owner'
 const APP = 'tallystone_app'
@@ -21,14 +20,14 @@ export interface TestDatabase {
 }
 
 /**
- * Makes the two roles and a migrated template on a server, with whatever the caller adds to it.
+ * Makes the two roles and a template on a server.
  *
  * @param adminUrl a superuser's address
- * @param fill called with the owner's address after the migrations, e.g. to seed
+ * @param fill makes the tables, as the owner, and whatever shall be in every copy
  */
 export async function prepareTestServer(
   adminUrl: string,
-  fill: (ownerUrl: string) => Promise<void> = async () => {},
+  fill: (urls: Pick<TestDatabase, 'appUrl' | 'ownerUrl'>) => Promise<unknown>,
 ): Promise<TestDatabaseServer> {
   await asAdmin(adminUrl, async (client) => {
     for (const role of [OWNER, APP]) {
@@ -39,10 +38,9 @@ export async function prepareTestServer(
     }
   })
   const template = `template_${randomName()}`
-  const { ownerUrl } = await createDatabase(adminUrl, template, 'template1')
+  const urls = await createDatabase(adminUrl, template, 'template1')
   await asAdmin(withDatabase(adminUrl, template), (client) => client.query('CREATE EXTENSION IF NOT EXISTS postgis'))
-  await migrate(ownerUrl)
-  await fill(ownerUrl)
+  await fill(urls)
   return { adminUrl, template }
 }
 
