@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import type { IconName } from './Icon'
+import type { IconName } from './iconLines'
 
 /** A place in the app that the navigation leads to. */
 export interface NavEntry {

@@ -13,17 +13,19 @@ interface BadgeProps {
 export function Badge({ label, tone = 'ink' }: BadgeProps) {
   const { colours } = useTheme()
   return (
-    <View style={[styles.badge, { borderColor: toneColour(tone, colours), backgroundColor: colours.panel }]}>
-      <AppText kind="label" tone={tone} weight="semibold">
-        {label}
-      </AppText>
+    <View style={styles.line}>
+      <View style={[styles.badge, { borderColor: toneColour(tone, colours), backgroundColor: colours.panel }]}>
+        <AppText kind="label" tone={tone} weight="semibold">
+          {label}
+        </AppText>
+      </View>
     </View>
   )
 }
 
 const styles = StyleSheet.create({
+  line: { flexDirection: 'row' },
   badge: {
-    alignSelf: 'flex-start',
     borderWidth: 1.5,
     borderRadius: RADIUS,
     paddingHorizontal: SPACE.small,

@@ -1,6 +1,7 @@
 import { ActivityIndicator, Pressable, StyleSheet, View } from 'react-native'
 import { AppText } from './AppText'
-import { Icon, type IconName } from './Icon'
+import { Icon } from './Icon'
+import type { IconName } from './iconLines'
 import { keepInApp } from './keepInApp'
 import { useMessages } from './MessagesProvider'
 import { useTheme } from './theme/ThemeProvider'

@@ -62,6 +62,7 @@ export function Choice<Value extends string>(props: ChoiceProps<Value>) {
             isTabStop={option.value === tabStop}
             isOff={disabled || option.disabled === true}
             grows={layout !== 'chips'}
+            isCentred={layout === 'segments'}
             onPress={() => onChange(option.value)}
             onStep={(by) => step(place, by)}
             onBlur={props.onBlur}
@@ -82,6 +83,7 @@ interface ChipProps<Value extends string> {
   readonly isTabStop: boolean
   readonly isOff: boolean
   readonly grows: boolean
+  readonly isCentred: boolean
   readonly onPress: () => void
   readonly onStep: (by: 1 | -1) => void
   readonly onBlur?: () => void
@@ -115,6 +117,7 @@ function Chip<Value extends string>(props: ChipProps<Value>) {
       style={[
         styles.chip,
         grows && styles.grows,
+        props.isCentred && styles.centred,
         { borderColor: colours.rule, backgroundColor: isChosen ? colours.chosen : colours.field },
         isOff && styles.off,
       ]}
@@ -143,6 +146,7 @@ const styles = StyleSheet.create({
     paddingVertical: SPACE.small,
   },
   grows: { flexGrow: 1, flexShrink: 1 },
+  centred: { justifyContent: 'center' },
   label: { flexShrink: 1 },
   off: { opacity: 0.5 },
 })

@@ -1,5 +1,5 @@
 import type { ButtonKind } from './Button'
-import type { IconName } from './Icon'
+import type { IconName } from './iconLines'
 
 export interface FileButtonProps {
   readonly label: string

@@ -1,5 +1,6 @@
 import { Pressable, StyleSheet } from 'react-native'
-import { Icon, type IconName } from './Icon'
+import { Icon } from './Icon'
+import type { IconName } from './iconLines'
 import { useTheme } from './theme/ThemeProvider'
 import { RADIUS, TARGET } from './theme/tokens'
 import { webOnly } from './web/webOnly'

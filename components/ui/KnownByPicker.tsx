@@ -69,7 +69,7 @@ export function KnownByPicker({ of, value, onChange, disabled = false, ways = KN
 }
 
 const styles = StyleSheet.create({
-  picker: { alignItems: 'flex-end' },
+  picker: { alignItems: 'flex-end', marginTop: -SPACE.medium, marginBottom: -SPACE.small },
   open: { width: '100%', paddingBottom: SPACE.small },
   word: { minHeight: TARGET, flexDirection: 'row', alignItems: 'center', gap: SPACE.tight, paddingLeft: SPACE.small },
   ways: { flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.tight, alignSelf: 'stretch' },
