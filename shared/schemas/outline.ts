@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { USES } from '@/shared/compute/factors/vocabulary'
-import { areaGeometry, calendarYear, id, polygonGeometry, typedText } from './primitives'
+import { areaGeometry, calendarYear, id, typedText } from './primitives'
 
 /** What a register said of an outline before anybody looked. Null is "the register does not say". */
 export const registerAttributes = z.object({
@@ -77,6 +77,6 @@ export type AttributeMapping = z.infer<typeof attributeMapping>
 export const previewFeature = z.object({
   type: z.literal('Feature'),
   id: z.number().int(),
-  geometry: polygonGeometry,
+  geometry: areaGeometry,
   properties: z.object({ index: z.number().int() }),
 })

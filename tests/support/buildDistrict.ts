@@ -37,7 +37,7 @@ export async function buildDistrict(
     `INSERT INTO outline (organisation_id, outline_id, district_id, reference, street, house_number, footprint_m2,
        register_year, register_storeys, register_height_m, register_use, geometry, inner_point)
      SELECT $organisationId, o.outline_id, $districtId, o.reference, 'Ferry Lane', o.number::text,
-       ST_Area(g.square::geography), 1930, 2, 7.5, 'residential', ST_Multi(g.square), ST_Centroid(g.square)
+       ST_Area(g.square::geography), 1930, 2, 7.5, 'terraced', ST_Multi(g.square), ST_Centroid(g.square)
      FROM (
        SELECT row_number() OVER () AS number, *
        FROM json_to_recordset($outlines::json) AS r(outline_id uuid, reference text, west float8, south float8)
