@@ -1,4 +1,4 @@
-import { ActivityIndicator, Pressable, StyleSheet, View } from 'react-native'
+import { ActivityIndicator, Pressable, StyleSheet } from 'react-native'
 import { AppText } from './AppText'
 import { Icon } from './Icon'
 import type { IconName } from './iconLines'
@@ -61,9 +61,7 @@ export function Button(props: ButtonProps) {
       ]}
     >
       {busy ? (
-        <View aria-label={t('common.busy')}>
-          <ActivityIndicator size="small" color={look.text} />
-        </View>
+        <ActivityIndicator size="small" color={look.text} aria-label={t('common.busy')} />
       ) : icon ? (
         <Icon name={icon} size={20} colour={look.text} />
       ) : null}

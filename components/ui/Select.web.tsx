@@ -25,6 +25,7 @@ export function Select<Value extends string>(props: SelectProps<Value>) {
           value={value ?? ''}
           disabled={disabled}
           required={props.required}
+          aria-label={props.label}
           aria-labelledby={ids.label}
           aria-describedby={error || hint ? ids.note : undefined}
           aria-invalid={error ? true : undefined}

@@ -61,6 +61,7 @@ export function TextField(props: TextFieldProps) {
             onBlur?.()
           }}
           placeholderTextColor={colours.inkSoft}
+          aria-label={props.label}
           aria-labelledby={ids.label}
           {...webOnly({
             'aria-describedby': error || props.hint ? ids.note : undefined,
