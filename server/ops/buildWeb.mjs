@@ -37,7 +37,7 @@ export async function buildWeb({ isForced = false, log } = {}) {
   rmSync(draft, { recursive: true, force: true })
   await run(path.join(places.modules, '.bin', 'expo'), ['export', '--platform', 'web', '--output-dir', draft], {
     cwd: ROOT,
-    env: { CI: '1', EXPO_OFFLINE: '1', EXPO_NO_TELEMETRY: '1', NODE_ENV: 'production' },
+    env: { CI: '1', EXPO_OFFLINE: '1', EXPO_NO_TELEMETRY: '1', EXPO_NO_TYPESCRIPT_SETUP: '1', NODE_ENV: 'production' },
     log,
   })
   addRegistration(path.join(draft, 'index.html'))

@@ -2,8 +2,6 @@ import { mkdtempSync, rmSync } from 'node:fs'
 import os from 'node:os'
 import path from 'node:path'
 import { z } from 'zod'
-import { runServerCommand } from '@/server/ops/commandLine.mjs'
-import { startThrowAwayCluster } from '@/server/ops/throwAwayCluster.mjs'
 import { E2E_STATE, serverSettings, type E2eState } from './appServer'
 import { dropTemplate, prepareTestServer } from './testDatabaseServer'
 
@@ -13,6 +11,9 @@ const seeded = z.object({
 
 /** Once before all stories: a database server with two templates, one migrated and one that holds the demo. */
 export default async function setUpStories(): Promise<() => Promise<void>> {
+  // Imported late, because Playwright would rewrite these files as CommonJS, and they ask where they lie.
+  const { runServerCommand } = await import('@/server/ops/commandLine.mjs')
+  const { startThrowAwayCluster } = await import('@/server/ops/throwAwayCluster.mjs')
   const given = process.env.TEST_DATABASE_ADMIN_URL
   const cluster = given ? { adminUrl: given, stop: async () => {} } : await startThrowAwayCluster()
   const photoRoot = mkdtempSync(path.join(os.tmpdir(), 'tallystone-photos-'))
