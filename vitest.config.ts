@@ -6,8 +6,12 @@ const alias = { '@': root }
 /** A component test renders React Native through react-native-web in jsdom. */
 const web = {
   resolve: {
-    alias: { '@': root, 'react-native': 'react-native-web' },
-    extensions: ['.web.tsx', '.web.ts', '.tsx', '.ts', '.mjs', '.js', '.json'],
+    alias: [
+      { find: '@', replacement: root },
+      { find: /^react-native$/, replacement: 'react-native-web' },
+      { find: /^react-native-svg$/, replacement: path.join(root, 'node_modules/react-native-svg/lib/module/index.js') },
+    ],
+    extensions: ['.web.tsx', '.web.ts', '.web.js', '.tsx', '.ts', '.mjs', '.js', '.json'],
   },
   define: { __DEV__: 'true' },
 }
