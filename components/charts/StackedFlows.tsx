@@ -1,6 +1,5 @@
 import { scaleBand } from 'd3-scale'
 import { useId } from 'react'
-import { Platform } from 'react-native'
 import { G, Line, Rect } from 'react-native-svg'
 import type { Material } from '@/shared/compute/factors/vocabulary'
 import { MATERIAL_HATCHES } from '@/shared/hatches/materialHatches'
@@ -41,7 +40,7 @@ const HEAD_PX = 14
 
 /** Flows year by year: bars stacked by material, whiskers from low to high of the total. */
 export function StackedFlows(props: StackedFlowsProps) {
-  const { title, flows, heightPx = 260 } = props
+  const { title, flows, onPressYear, heightPx = 260 } = props
   const { t, locale } = useMessages()
   const totals = flows.map(totalKg)
   const peak = totals.indexOf(Math.max(...totals))
@@ -57,7 +56,19 @@ export function StackedFlows(props: StackedFlowsProps) {
         })
       : `${title}. ${t('common.charts.empty')}`
   return (
-    <ChartFrame label={label} heightPx={heightPx}>
+    <ChartFrame
+      label={label}
+      heightPx={heightPx}
+      onPressAt={
+        onPressYear
+          ? (xPx, widthPx) => {
+              const { bands } = flowScales(flows, widthPx, heightPx, locale)
+              const pressed = flows.find(({ year }) => xPx < (bands(year) ?? 0) + bands.step())
+              if (pressed) onPressYear(pressed.year)
+            }
+          : undefined
+      }
+    >
       {(widthPx) => <Drawing {...props} widthPx={widthPx} heightPx={heightPx} />}
     </ChartFrame>
   )
@@ -67,21 +78,30 @@ function totalKg({ parts }: FlowYear): number {
   return parts.reduce((sum, { massKg }) => sum + massKg, 0)
 }
 
+function flowScales(flows: readonly FlowYear[], widthPx: number, heightPx: number, locale: string) {
+  const groundPx = heightPx - FOOT_PX
+  const mostKg = Math.max(0, ...flows.map((flow) => Math.max(totalKg(flow), flow.highKg ?? 0)))
+  const { yPx, ticks } = massScale(mostKg, groundPx, HEAD_PX, locale)
+  const leftPx = Math.max(28, ...ticks.map(({ label }) => labelWidthPx(label) + 8))
+  const bands = scaleBand<number>()
+    .domain(flows.map(({ year }) => year))
+    .range([leftPx, widthPx])
+    .paddingInner(0.18)
+    .paddingOuter(0.1)
+  return { bands, yPx, ticks, leftPx, groundPx }
+}
+
 interface DrawingProps extends StackedFlowsProps {
   readonly widthPx: number
   readonly heightPx: number
 }
 
-function Drawing({ flows, order, selectedYear, onPressYear, widthPx, heightPx }: DrawingProps) {
+function Drawing({ flows, order, selectedYear, widthPx, heightPx }: DrawingProps) {
   const { locale } = useMessages()
   const { colours } = useTheme()
   const prefix = useId()
-  const groundPx = heightPx - FOOT_PX
-  const mostKg = Math.max(0, ...flows.map((flow) => Math.max(totalKg(flow), flow.highKg ?? 0)))
-  const { yPx, ticks } = massScale(mostKg, groundPx, HEAD_PX, locale)
-  const leftPx = Math.max(28, ...ticks.map(({ label }) => labelWidthPx(label) + 8))
+  const { bands, yPx, ticks, leftPx, groundPx } = flowScales(flows, widthPx, heightPx, locale)
   const years = flows.map(({ year }) => year)
-  const bands = scaleBand<number>().domain(years).range([leftPx, widthPx]).paddingInner(0.18).paddingOuter(0.1)
   const materials = order ?? flows[0]?.parts.map(({ material }) => material) ?? []
   const barPx = bands.bandwidth()
   return (
@@ -116,16 +136,6 @@ function Drawing({ flows, order, selectedYear, onPressYear, widthPx, heightPx }:
               />
             ))}
             <Whisker flow={flow} x={x + barPx / 2} yPx={yPx} />
-            {onPressYear ? (
-              <Rect
-                x={x - 1}
-                y={0}
-                width={barPx + 2}
-                height={heightPx}
-                fill="transparent"
-                {...pressable(() => onPressYear(flow.year))}
-              />
-            ) : null}
           </G>
         )
       })}
@@ -137,11 +147,6 @@ function Drawing({ flows, order, selectedYear, onPressYear, widthPx, heightPx }:
       />
     </G>
   )
-}
-
-/** On the web a plain click: the drawings' own touch handlers are not known to the browser. */
-function pressable(onPress: () => void): object {
-  return Platform.OS === 'web' ? { onClick: onPress, cursor: 'pointer' } : { onPress }
 }
 
 /** Edge between stones; the hatch grounds are the same in every theme, so it is as well. */

@@ -13,7 +13,10 @@ export interface WallLayout {
   readonly bricks: readonly Brick[]
 }
 
-const GAP_PX = 2
+/** Joint beside a brick [px]: thinner beside small ones. */
+function gap(brickWidthPx: number): number {
+  return brickWidthPx < 10 ? 1 : 2
+}
 
 /**
  * Lays a number of bricks in running bond, in the largest size that keeps the wall under a height.
@@ -25,17 +28,18 @@ const GAP_PX = 2
 export function wallLayout(count: number, widthPx: number, mostHeightPx: number): WallLayout {
   const sizes = [28, 22, 18, 15, 12, 10, 8, 6, 5, 4]
   const brickWidthPx =
-    sizes.find((size) => rowCount(count, widthPx, size) * (brickHeight(size) + GAP_PX) <= mostHeightPx) ?? 4
+    sizes.find((size) => rowCount(count, widthPx, size) * (brickHeight(size) + gap(size)) <= mostHeightPx) ?? 4
   const brickHeightPx = brickHeight(brickWidthPx)
+  const gapPx = gap(brickWidthPx)
   const rows = rowCount(count, widthPx, brickWidthPx)
   const inRow = bricksInRow(widthPx, brickWidthPx)
-  const heightPx = Math.max(1, rows) * (brickHeightPx + GAP_PX)
+  const heightPx = Math.max(1, rows) * (brickHeightPx + gapPx)
   const bricks = Array.from({ length: count }, (_, place): Brick => {
     const row = Math.floor(place / inRow)
-    const bond = row % 2 === 0 ? (brickWidthPx + GAP_PX) / 2 : 0
+    const bond = row % 2 === 0 ? (brickWidthPx + gapPx) / 2 : 0
     return {
-      x: bond + (place % inRow) * (brickWidthPx + GAP_PX) + 1,
-      y: heightPx - (row + 1) * (brickHeightPx + GAP_PX) + 1,
+      x: bond + (place % inRow) * (brickWidthPx + gapPx) + 1,
+      y: heightPx - (row + 1) * (brickHeightPx + gapPx) + 1,
     }
   })
   return { brickWidthPx, brickHeightPx, heightPx, bricks }
@@ -46,7 +50,10 @@ function brickHeight(widthPx: number): number {
 }
 
 function bricksInRow(widthPx: number, brickWidthPx: number): number {
-  return Math.max(1, Math.floor((widthPx - (brickWidthPx + GAP_PX) / 2) / (brickWidthPx + GAP_PX)))
+  return Math.max(
+    1,
+    Math.floor((widthPx - (brickWidthPx + gap(brickWidthPx)) / 2) / (brickWidthPx + gap(brickWidthPx))),
+  )
 }
 
 function rowCount(count: number, widthPx: number, brickWidthPx: number): number {

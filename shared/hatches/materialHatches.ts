@@ -33,11 +33,11 @@ export const MATERIAL_HATCHES: Readonly<Record<Material, Hatch>> = {
   'masonry-units': {
     ground: '#E0A18C',
     ink: '#7A2C17',
-    full: diagonals(11, [
+    full: diagonals(13, [
       { at: 2, widthPx: 1.1 },
       { at: 6, widthPx: 1.1 },
     ]),
-    calm: diagonals(13, [
+    calm: diagonals(14, [
       { at: 2, widthPx: 1 },
       { at: 6, widthPx: 1 },
     ]),
