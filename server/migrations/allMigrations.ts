@@ -2,7 +2,14 @@ import { m0001People } from './m0001People'
 import { m0002Field } from './m0002Field'
 import { m0003Planning } from './m0003Planning'
 import { m0004Sessions } from './m0004Sessions'
+import { m0005OutlineBlocks } from './m0005OutlineBlocks'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
-export const allMigrations: readonly Migration[] = [m0001People, m0002Field, m0003Planning, m0004Sessions]
+export const allMigrations: readonly Migration[] = [
+  m0001People,
+  m0002Field,
+  m0003Planning,
+  m0004Sessions,
+  m0005OutlineBlocks,
+]

@@ -31,7 +31,8 @@ export async function readDistrictBlocks(scope: Scope, districtId: string): Prom
     `SELECT b.block_id, b.name, ST_AsGeoJSON(b.geometry, 7)::json AS geometry,
        (SELECT count(*) FROM outline o
         WHERE o.organisation_id = b.organisation_id AND o.block_id = b.block_id)::integer AS outline_count
-     FROM block b WHERE b.organisation_id = $organisationId AND b.district_id = $districtId
+     FROM block b
+     WHERE b.organisation_id = $organisationId AND b.district_id = $districtId
      ORDER BY length(b.name), b.name`,
     { organisationId: scope.organisationId, districtId },
   )
