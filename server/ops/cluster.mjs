@@ -65,6 +65,12 @@ export async function clusterPort(folder) {
 
 function openCluster(folder) {
   const dataFolder = path.join(folder, 'data')
+  if (existsSync(dataFolder) && statSync(dataFolder).uid !== postgresAccount().uid) {
+    throw new Error(
+      `The database in ${folder} was made by another account (root, perhaps). Run this as that account again; ` +
+        'everything in it is safe.',
+    )
+  }
   const version = existsSync(path.join(dataFolder, 'PG_VERSION'))
     ? readFileSync(path.join(dataFolder, 'PG_VERSION'), 'utf8').trim()
     : undefined
@@ -116,6 +122,9 @@ async function initialise(cluster, { superuserPassword }, isThrowAway) {
     unix_socket_directories: "''",
     timezone: "'UTC'",
     log_timezone: "'UTC'",
+    work_mem: "'32MB'",
+    random_page_cost: '1.1',
+    jit: 'off',
     ...(isThrowAway ? CARELESS : {}),
   }
   const lines = Object.entries(settings).map(([name, value]) => `${name} = ${value}`)

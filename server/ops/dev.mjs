@@ -56,7 +56,13 @@ async function develop() {
   const metro = await startProcess({
     args: [bin('expo'), 'start', '--web', '--offline', '--port', METRO_PORT],
     cwd: ROOT,
-    env: { ...process.env, EXPO_NO_TELEMETRY: '1', EXPO_NO_TYPESCRIPT_SETUP: '1', BROWSER: 'none', API_ADDRESS: `http://127.0.0.1:${port}` },
+    env: {
+      ...process.env,
+      EXPO_NO_TELEMETRY: '1',
+      EXPO_NO_TYPESCRIPT_SETUP: '1',
+      BROWSER: 'none',
+      API_ADDRESS: `http://127.0.0.1:${port}`,
+    },
     readyUrl: `${address}/status`,
   })
   closers.add(metro.stop)

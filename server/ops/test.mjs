@@ -109,7 +109,7 @@ function runShown(program, args, env = {}) {
   return new Promise((resolve) => {
     const child = spawn(program, args, {
       cwd: ROOT,
-      env: { ...process.env, ...env },
+      env: { ...process.env, VITE_CONFIG_NATIVE_IGNORE_WARNING: 'true', ...env },
       stdio: ['ignore', 'inherit', 'inherit'],
     })
     children.add(child)
