@@ -1,5 +1,5 @@
 import { useEffect, type ReactNode } from 'react'
-import { ScrollView, StyleSheet, View } from 'react-native'
+import { ScrollView, StyleSheet, useWindowDimensions, View } from 'react-native'
 import { AppText } from './AppText'
 import { IconButton } from './IconButton'
 import { useMessages } from './MessagesProvider'
@@ -11,6 +11,9 @@ import { webOnly } from './web/webOnly'
 
 /** Widest a screen's content becomes [px]: a form, a report, or whatever the window gives. */
 const WIDTHS = { form: 720, report: 1120, full: undefined } as const
+
+/** From this width of the window on, a column at the right leaves enough for the content [px]. */
+const ASIDE_FROM_PX = 1100
 
 interface ScreenProps {
   readonly title: string
@@ -32,40 +35,25 @@ interface ScreenProps {
 
 /** One screen: header with its title, main part, and at the foot what is always at hand. */
 export function Screen(props: ScreenProps) {
-  const { title, width = 'report', fill = false, footer, aside, children } = props
+  const { title, width = 'report', footer, aside } = props
   const { colours } = useTheme()
-  const isWide = useWide()
-  const maxWidth = WIDTHS[width]
+  const { width: windowPx } = useWindowDimensions()
+  const isBeside = windowPx >= ASIDE_FROM_PX
   useEffect(() => setDocumentTitle(title), [title])
-
-  const body = (
-    <View
-      style={[fill ? styles.fill : styles.stack, !fill && { maxWidth, padding: isWide ? SPACE.wide : SPACE.medium }]}
-    >
-      {children}
-    </View>
-  )
   return (
     <View style={styles.screen} {...webOnly({ dataSet: { printFlow: '' } })}>
       <Header {...props} />
       <View
         role="main"
         {...webOnly({ id: 'main', tabIndex: -1, dataSet: { printFlow: '', insetFocus: '' } })}
-        style={[styles.main, isWide && aside ? styles.row : null]}
+        style={[styles.main, isBeside && aside ? styles.row : null]}
       >
-        {fill ? (
-          body
-        ) : (
-          <ScrollView style={styles.scroll} {...webOnly({ tabIndex: 0, dataSet: { printFlow: '', insetFocus: '' } })}>
-            {body}
-            {!isWide && aside ? <View style={styles.asideBelow}>{aside}</View> : null}
-          </ScrollView>
-        )}
-        {isWide && aside ? (
+        <Body {...props} aside={isBeside ? undefined : aside} />
+        {isBeside && aside ? (
           <ScrollView
             style={[styles.aside, { borderColor: colours.rule }]}
             contentContainerStyle={styles.asideStack}
-            {...webOnly({ tabIndex: 0, dataSet: { printFlow: '', insetFocus: '' } })}
+            {...scrolls}
           >
             {aside}
           </ScrollView>
@@ -76,12 +64,45 @@ export function Screen(props: ScreenProps) {
           style={[styles.footer, { backgroundColor: colours.ground, borderColor: colours.rule }]}
           {...webOnly({ dataSet: { printHide: '' } })}
         >
-          <View style={[styles.footerRow, { maxWidth }]}>{footer}</View>
+          <View style={[styles.footerRow, { maxWidth: WIDTHS[width] }]}>{footer}</View>
         </View>
       ) : null}
     </View>
   )
 }
+
+/** The content, and under it what has no room beside it. */
+function Body({ width = 'report', fill = false, aside, children }: ScreenProps) {
+  const { colours } = useTheme()
+  const isWide = useWide()
+  if (fill) {
+    return (
+      <>
+        <View style={styles.fill}>{children}</View>
+        {aside ? (
+          <ScrollView
+            style={[styles.asideUnder, { borderColor: colours.rule }]}
+            contentContainerStyle={styles.asideStack}
+            {...scrolls}
+          >
+            {aside}
+          </ScrollView>
+        ) : null}
+      </>
+    )
+  }
+  return (
+    <ScrollView style={styles.scroll} {...scrolls}>
+      <View style={[styles.stack, { maxWidth: WIDTHS[width], padding: isWide ? SPACE.wide : SPACE.medium }]}>
+        {children}
+        {aside}
+      </View>
+    </ScrollView>
+  )
+}
+
+/** What scrolls can be reached and scrolled by the keyboard, and unrolls on paper. */
+const scrolls = webOnly({ tabIndex: 0, dataSet: { printFlow: '', insetFocus: '' } })
 
 function Header({ title, subtitle, right, onBack }: ScreenProps) {
   const { colours } = useTheme()
@@ -133,8 +154,8 @@ const styles = StyleSheet.create({
   stack: { width: '100%', gap: SPACE.medium },
   fill: { flex: 1, minHeight: 0, minWidth: 0 },
   aside: { flexGrow: 0, flexShrink: 0, flexBasis: 380, borderLeftWidth: 3 },
+  asideUnder: { flexGrow: 0, flexShrink: 0, maxHeight: '48%', borderTopWidth: 3 },
   asideStack: { padding: SPACE.large, gap: SPACE.large },
-  asideBelow: { padding: SPACE.medium, paddingTop: 0, gap: SPACE.medium },
   footer: { borderTopWidth: 1.5, paddingHorizontal: SPACE.large, paddingVertical: SPACE.medium },
   footerRow: { flexDirection: 'row', gap: SPACE.medium, width: '100%' },
 })
