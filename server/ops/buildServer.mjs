@@ -3,7 +3,7 @@ import path from 'node:path'
 import { fingerprint, isFresh, writeStamp } from './fingerprint.mjs'
 import { places, ROOT } from './places.mjs'
 
-const INPUTS = ['server', 'shared', 'assets/factors', 'package-lock.json', 'tsconfig.json']
+const INPUTS = ['server', 'shared', 'assets/factors', 'package.json', 'package-lock.json', 'tsconfig.json']
 const ENTRIES = ['server/main.ts', 'server/cli.ts']
 
 /**
