@@ -1,11 +1,14 @@
-import type { ReactNode } from 'react'
+import { useState, type ReactNode } from 'react'
 import { StyleSheet, View } from 'react-native'
 import Svg, { Rect } from 'react-native-svg'
 import { AppText } from '@/components/ui/AppText'
+import { Button } from '@/components/ui/Button'
+import { IconButton } from '@/components/ui/IconButton'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { useTheme } from '@/components/ui/theme/ThemeProvider'
 import { SPACE } from '@/components/ui/theme/tokens'
+import { useWide } from '@/components/ui/theme/useWide'
 
 /** One line of the map's legend: a mark (a `Swatch`) or a colour, and what it means. */
 export interface MapLegendEntry {
@@ -22,13 +25,22 @@ interface MapLegendProps {
   readonly note?: string
 }
 
-/** What the paint of a map means, on a small panel over it. */
+/** What the paint of a map means, on a small panel over it; on a phone behind a button, so that the map stays free. */
 export function MapLegend({ title, entries, note }: MapLegendProps) {
   const { colours } = useTheme()
   const { t } = useMessages()
+  const isWide = useWide()
+  const [isOpen, setIsOpen] = useState(false)
+  if (!isWide && !isOpen) {
+    return <Button icon="list" label={t('common.map.legend')} expanded={false} onPress={() => setIsOpen(true)} />
+  }
   return (
-    <Panel>
-      <AppText weight="semibold">{title}</AppText>
+    <Panel
+      action={
+        isWide ? null : <IconButton icon="close" label={t('common.map.closeLegend')} onPress={() => setIsOpen(false)} />
+      }
+      title={title}
+    >
       <View role="list" aria-label={t('common.map.legend')} style={styles.list}>
         {entries.map(({ key, label, colour, mark }) => (
           <View key={key} role="listitem" style={styles.entry}>

@@ -8,10 +8,11 @@ import { Notice } from '@/components/ui/Notice'
 import { useStillness } from '@/components/ui/theme/useStillness'
 import { useTheme } from '@/components/ui/theme/ThemeProvider'
 import { RADIUS, SPACE } from '@/components/ui/theme/tokens'
+import { areaFeatures } from './areaFeatures'
 import { boundsOf, closedRing, type Bounds } from './boundsOf'
 import { createOutlineCanvas, type OutlineCanvas } from './createOutlineCanvas'
 import { DrawBar, MapButtons } from './MapControls'
-import { namedFeatures, outlineFeatures } from './outlineFeatures'
+import { outlineFeatures, streetFeatures } from './outlineFeatures'
 import type { OutlineMapProps } from './OutlineMap.types'
 import { prepareMapDocument } from './prepareMapDocument'
 
@@ -156,11 +157,11 @@ function useFeatures(canvas: OutlineCanvas | null, props: OutlineMapProps, draft
     canvas?.setSelected(selectedIds ?? [])
   }, [canvas, selectedIds])
   useEffect(() => {
-    canvas?.setFeatures('areas', namedFeatures(areas ?? [], colours.selection))
+    canvas?.setFeatures('areas', areaFeatures(areas ?? [], colours.selection))
   }, [canvas, areas, colours])
   useEffect(() => {
-    canvas?.setFeatures('streets', namedFeatures(streets ?? [], colours.panel))
-  }, [canvas, streets, colours])
+    canvas?.setFeatures('streets', streetFeatures(streets ?? []))
+  }, [canvas, streets])
   useEffect(() => {
     canvas?.setPosition(userPosition)
   }, [canvas, userPosition])

@@ -2,8 +2,9 @@ import { cleanup, render, screen, waitFor } from '@testing-library/react'
 import { afterEach, describe, expect, it } from 'vitest'
 import { contrastRatio } from '@/components/ui/theme/contrastRatio'
 import { accuracyRing } from './accuracyRing'
+import { areaFeatures } from './areaFeatures'
 import { boundsOf, closedRing } from './boundsOf'
-import { namedFeatures, outlineFeatures } from './outlineFeatures'
+import { outlineFeatures } from './outlineFeatures'
 import { OutlineMap } from './OutlineMap'
 import type { MapOutline } from './OutlineMap.types'
 import { quantileBreaks, RAMP, rampColour } from './ramp'
@@ -91,11 +92,30 @@ describe('outlineFeatures', () => {
       outlinePx: 1,
     })
   })
+})
 
-  it('names areas and gives them the colour of the others when they have none', () => {
-    const { features } = namedFeatures([{ id: 'b', geometry: square.geometry, name: 'Beat 4' }], '#1B5566')
+describe('areaFeatures', () => {
+  it('sets the name of an area once, inside it', () => {
+    const { features } = areaFeatures([{ id: 'b', geometry: square.geometry, name: 'Beat 4' }], '#1B5566')
 
-    expect(features[0]?.properties).toEqual({ name: 'Beat 4', colour: '#1B5566' })
+    expect(features[0]?.properties).toEqual({ colour: '#1B5566' })
+    expect(features[1]?.properties).toEqual({ name: 'Beat 4' })
+    expect(boundsOf([features[1]!.geometry])?.[0]).toBeCloseTo(4.0005, 6)
+  })
+
+  it('still sets the name where the ring encloses nothing', () => {
+    const flat = {
+      type: 'Polygon' as const,
+      coordinates: [
+        [
+          [4, 52],
+          [4.002, 52],
+          [4, 52],
+        ],
+      ],
+    }
+
+    expect(areaFeatures([{ id: 'b', geometry: flat, name: 'Beat 5' }], '#1B5566').features).toHaveLength(2)
   })
 })
 

@@ -1,6 +1,6 @@
 import type { FeatureCollection } from 'geojson'
 import { MATERIAL_HATCHES } from '@/shared/hatches/materialHatches'
-import type { MapArea, MapOutline, MapStreet, OutlinePaint } from './OutlineMap.types'
+import type { MapOutline, MapStreet, OutlinePaint } from './OutlineMap.types'
 
 /** The outlines with their paint as properties, as the layers of the map read them. */
 export function outlineFeatures(
@@ -30,14 +30,10 @@ export function plainFill({ fill, hatch }: OutlinePaint): string {
 /** An outline that is drawn by its edge alone still takes a press. */
 const NO_FILL = 'rgba(0, 0, 0, 0)'
 
-/** Areas or streets with their names and colours. */
-export function namedFeatures(things: readonly (MapArea | MapStreet)[], colour: string): FeatureCollection {
+/** The streets with their names. */
+export function streetFeatures(streets: readonly MapStreet[]): FeatureCollection {
   return {
     type: 'FeatureCollection',
-    features: things.map((thing) => ({
-      type: 'Feature',
-      geometry: thing.geometry,
-      properties: { name: thing.name ?? '', colour: 'colour' in thing && thing.colour ? thing.colour : colour },
-    })),
+    features: streets.map(({ geometry, name = '' }) => ({ type: 'Feature', geometry, properties: { name } })),
   }
 }
