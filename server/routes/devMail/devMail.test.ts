@@ -57,7 +57,7 @@ describe('/dev/mail', () => {
   it('is not there unless the settings open it, and production refuses that setting', async () => {
     expect((await open('/dev/mail', { hasDevMail: false })).status).toBe(404)
     const environment = {
-      NODE_ENV: 'production',
+      NODE_ENV: 'production' as const,
       DATABASE_URL: 'postgres://x',
       SESSION_SECRET: TEST_SECRET,
       DEV_MAIL: '1',
