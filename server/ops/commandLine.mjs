@@ -8,8 +8,8 @@ import { run } from './run.mjs'
  * @returns {Promise<unknown>} what its last line of output holds as JSON, or undefined
  * @throws {Error} with what the command said
  */
-export async function runServerCommand(command, environment) {
-  const args = ['--enable-source-maps', path.join(places.server, 'cli.mjs'), command]
+export async function runServerCommand(command, environment, words = []) {
+  const args = ['--enable-source-maps', path.join(places.server, 'cli.mjs'), command, ...words]
   const output = await run(process.execPath, args, { cwd: ROOT, env: environment }).catch((error) => {
     throw new Error(error.output?.trim() || error.message)
   })

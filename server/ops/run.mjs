@@ -13,7 +13,13 @@ export class CommandError extends Error {
 /** Programs that run now. */
 const running = new Set()
 
-/** Ends what {@link run} has started and not yet seen ending; for when we are told to stop. */
+/** Counts a program among those that {@link endRunning} ends. */
+export function track(child) {
+  running.add(child)
+  child.once('close', () => running.delete(child))
+}
+
+/** Ends what was started and has not ended; for when we are told to stop. */
 export function endRunning() {
   for (const child of running) child.kill('SIGTERM')
 }
@@ -35,7 +41,7 @@ export function run(program, args, { cwd, env, input, log } = {}) {
       env: { ...process.env, ...env },
       stdio: [input === undefined ? 'ignore' : 'pipe', 'pipe', 'pipe'],
     })
-    running.add(child)
+    track(child)
     let output = ''
     let everything = ''
     const take = (isOutput) => (chunk) => {
@@ -48,7 +54,6 @@ export function run(program, args, { cwd, env, input, log } = {}) {
     child.stderr.on('data', take(false))
     child.once('error', (error) => reject(new CommandError(program, undefined, error.message)))
     child.once('close', (code) => {
-      running.delete(child)
       if (code === 0) resolve(output)
       else reject(new CommandError([program, ...args].join(' '), code, everything))
     })

@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process'
+import { track } from './run.mjs'
 
 const POLL_MS = 100
 
@@ -14,6 +15,7 @@ const POLL_MS = 100
  */
 export async function startProcess({ args, cwd, env, readyUrl, stdio = 'inherit', timeoutMs = 60_000 }) {
   const child = spawn(process.execPath, args, { cwd, env, stdio })
+  track(child)
   let exitCode
   const ended = new Promise((resolve) => {
     child.once('error', () => resolve((exitCode = 1)))

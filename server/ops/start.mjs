@@ -11,7 +11,10 @@ import { say, step } from './say.mjs'
 import { hasOwnDatabase, openDatabaseAndSettings, readPort } from './serverSettings.mjs'
 import { startProcess } from './serveProcess.mjs'
 
-/** `npm start [-- --empty]`: from a bare checkout to a served product. */
+/**
+ * `npm start`: from a bare checkout to a served product, with the demo.
+ * `npm start -- --empty [--organisation NAME] [--name NAME] [--email ADDRESS]`: without it, for one's own organisation.
+ */
 const closers = makeClosers()
 let isStopping = false
 
@@ -39,7 +42,7 @@ try {
 }
 
 async function start() {
-  const isEmpty = readArguments(process.argv.slice(2))
+  const command = readArguments(process.argv.slice(2))
   const port = readPort()
   await refuseTakenPort(port, process.env.HOST)
   await prepareMachine(hasOwnDatabase() ? [] : ['database'])
@@ -48,7 +51,7 @@ async function start() {
   const { environment } = await step('Starting the database', () => opening)
   await step('Building the server', () => buildServer())
   const [accounts] = await Promise.all([
-    step('Preparing the tables', () => fill(environment, isEmpty)),
+    step('Preparing the tables', () => fill(environment, command)),
     step('Building the app (about a minute when something changed)', () => buildWeb()),
   ])
   if (isStopping) return
@@ -65,10 +68,17 @@ async function start() {
   throw new Error(`The server ended by itself (${exitCode}). What it wrote stands above.`)
 }
 
+/** @returns {string[]} the command of the server that fills an empty database */
 function readArguments(words) {
-  const unknown = words.find((word) => word !== '--empty')
-  if (unknown !== undefined) throw new Error(`"${unknown}" is not known. npm start takes -- --empty, or nothing.`)
-  return words.includes('--empty')
+  const [first, ...steward] = words
+  if (first === undefined) return ['seed-demo']
+  const known = /^--(?:organisation|name|email)(?:=|$)/
+  const unknown = first === '--empty' ? steward.find((word) => word.startsWith('--') && !known.test(word)) : first
+  if (unknown === undefined) return ['first-steward', ...steward]
+  throw new Error(
+    `"${unknown}" is not known. npm start takes nothing, or -- --empty, and after that --organisation, --name and ` +
+      '--email of the first steward. Nothing was started.',
+  )
 }
 
 async function refuseTakenPort(port, host) {
@@ -79,22 +89,24 @@ async function refuseTakenPort(port, host) {
   )
 }
 
-/** @returns {Promise<{ accounts?: readonly object[], link?: string }>} */
-async function fill(environment, isEmpty) {
+/** @returns {Promise<{ accounts?: readonly object[], link?: string, email?: string }>} */
+async function fill(environment, [command, ...words]) {
   await runServerCommand('migrate', environment)
-  const answer = await runServerCommand(isEmpty ? 'first-steward' : 'seed-demo', environment)
-  return answer ?? {}
+  return (await runServerCommand(command, environment, words)) ?? {}
 }
 
 function localAddress({ HOST, PORT }) {
   const host = HOST === '0.0.0.0' || HOST === '::' ? '127.0.0.1' : HOST
-  return `http://${host}:${PORT}`
+  return `http://${host.includes(':') ? `[${host}]` : host}:${PORT}`
 }
 
-function welcome(environment, { accounts = [], link }) {
+function welcome(environment, { accounts = [], link, email }) {
   const address = environment.PUBLIC_URL ?? localAddress(environment)
   say(`\nTallystone is up: ${address}`)
-  if (link) say(`\nThe first steward opens this link to choose a password:\n  ${link}`)
+  if (link) {
+    say(`\nThe first steward opens this link to choose a password:\n  ${link}`)
+    say(`and signs in as ${email} from then on.`)
+  }
   if (accounts.length > 0) {
     say('\nThe demo, Saltmarsh Hythe, is invented. Its accounts:')
     for (const line of table(accounts, ['role', 'name', 'email', 'password'])) say(`  ${line}`)
