@@ -84,11 +84,17 @@ function stopOnSignal(server: Server, context: Context): void {
 }
 
 main().catch((error: unknown) => {
-  const fault = describeFault(error)
-  const words =
-    error instanceof ConfigError ? error.message : `The server did not start: ${fault.message ?? fault.name}`
-  process.stderr.write(`${words}\n`)
+  process.stderr.write(`${startFault(error)}\n`)
   process.exitCode = 1
   // Pools that were opened before the fault would keep the process alive.
   setTimeout(() => process.exit(1), 1_000).unref()
 })
+
+function startFault(error: unknown): string {
+  if (error instanceof ConfigError) return error.message
+  const { name, message, code } = describeFault(error)
+  if (message?.startsWith('pg-boss')) return 'The server did not start: tables are missing or old. Run "migrate" first.'
+  const isOfDatabase = message === undefined || code === 'ECONNREFUSED'
+  const hint = isOfDatabase ? ' Is the database of DATABASE_URL up, and does it let us in?' : ''
+  return `The server did not start: ${message ?? `${name} ${code ?? ''}`.trim()}.${hint}`
+}

@@ -9,6 +9,7 @@ interface RecipientRow {
   name: string
   email: string
   status: string
+  language: string
   organisation_name: string
 }
 
@@ -23,7 +24,7 @@ export async function sendLink(
   const made = makeOneTimeToken()
   const recipient = await context.database.withScope({ organisationId, personId }, async (scope) => {
     const [row] = await scope.select<RecipientRow>(
-      `SELECT p.name, p.email, p.status, o.name AS organisation_name
+      `SELECT p.name, p.email, p.status, p.language, o.name AS organisation_name
        FROM person p JOIN organisation o USING (organisation_id)
        WHERE p.organisation_id = $organisationId AND p.person_id = $personId`,
       { organisationId, personId },
@@ -41,6 +42,7 @@ export async function sendLink(
       organisationName: recipient.organisation_name,
       publicUrl: context.config.publicUrl,
       token: made.token,
+      language: recipient.language,
     }),
   )
 }

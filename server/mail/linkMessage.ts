@@ -7,6 +7,8 @@ export interface LinkRecipient {
   readonly organisationName: string
   readonly publicUrl: string
   readonly token: string
+  /** BCP 47 tag of the language the person reads. */
+  readonly language: string
 }
 
 /** The words of a message that carries one link. */
@@ -22,10 +24,10 @@ export interface LinkWords {
 }
 
 /** Lays out a message with one link, as text and as HTML that loads nothing. */
-export function linkMessage(to: string, words: LinkWords): Message {
+export function linkMessage({ to, language }: LinkRecipient, words: LinkWords): Message {
   const text = [words.greeting, words.opening, words.url, words.closing].join('\n\n')
   const html = `<!doctype html>
-<html lang="en">
+<html lang="${escapeHtml(language)}">
 <body style="margin:0;background:#F7F3EA;color:#20292E;font:17px/1.5 Barlow,Arial,sans-serif">
 <div style="max-width:560px;margin:0 auto;padding:32px 24px;border-top:6px solid #20292E">
 <p>${escapeHtml(words.greeting)}</p>

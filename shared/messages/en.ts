@@ -10,6 +10,7 @@ import errors from './en/errors.json'
 import factorBook from './en/factorBook.json'
 import listed from './en/listed.json'
 import loads from './en/loads.json'
+import mail from './en/mail.json'
 import me from './en/me.json'
 import nav from './en/nav.json'
 import notices from './en/notices.json'
@@ -40,6 +41,7 @@ export const en = {
   factorBook,
   listed,
   loads,
+  mail,
   me,
   nav,
   notices,
