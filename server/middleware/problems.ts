@@ -6,13 +6,20 @@ import { describeFault } from './describeFault'
 /** Every unknown address below the API is one problem. */
 export const unknownAddress: RequestHandler = (_request, _response, next) => next(notFound('address'))
 
-/** Last stop of every error: one problem+json, without stack, SQL or path. Only faults of ours are logged as errors. */
+/** Refusals that a steward may want to see in the log: who may not, and too often. */
+const WATCHED: ReadonlySet<number> = new Set([401, 403, 429])
+
+/**
+ * Last stop of every error: one problem+json, without stack, SQL or path. Only faults of ours are logged as errors;
+ * refusals of access are noted by code and request, never with what was sent.
+ */
 export function answerProblem(log: Logger): ErrorRequestHandler {
   return (error: unknown, request, response, next) => {
     if (response.headersSent) return next(error)
     const refusal = asRefusal(error)
     if (refusal.status >= 500)
       log.error({ requestId: request.requestId, fault: describeFault(error) }, 'request failed')
+    if (WATCHED.has(refusal.status)) log.info({ requestId: request.requestId, code: refusal.code }, 'access refused')
     response
       .status(refusal.status)
       .set(refusal.headers)

@@ -9,7 +9,7 @@ const UNIQUE_SHARE = 0.9
 /** Names under which registers keep what we ask for; the first pattern that a name meets weighs most. */
 const patterns: Readonly<Record<keyof AttributeMapping, readonly RegExp[]>> = {
   reference: [
-    /^(ref|reference|referentie|référence|building.?(id|no|nr)|object.?id|identificatie\w*|gebäude.?id|gml.?id|uuid|egid)$/,
+    /^(ref|reference|referentie|référence|building.?(id|no|nr)|object.?id|identificatie\w*|geb(ä|ae)ude.?id|gml.?id|uuid|egid)$/,
     /^(id|gid|fid|osm.?id|code|nr|nummer)$/,
   ],
   street: [
