@@ -94,7 +94,7 @@ function startFault(error: unknown): string {
   if (error instanceof ConfigError) return error.message
   const { name, message, code } = describeFault(error)
   if (message?.startsWith('pg-boss')) return 'The server did not start: tables are missing or old. Run "migrate" first.'
-  const isOfDatabase = message === undefined || code === 'ECONNREFUSED'
+  const isOfDatabase = message === undefined || /ECONN|ENOTFOUND|ETIMEDOUT/.test(message)
   const hint = isOfDatabase ? ' Is the database of DATABASE_URL up, and does it let us in?' : ''
   return `The server did not start: ${message ?? `${name} ${code ?? ''}`.trim()}.${hint}`
 }
