@@ -15,6 +15,7 @@ afterAll(() => database.drop())
 function start(settings: Record<string, string>) {
   const child = spawn(process.execPath, ['--import', 'tsx', 'server/main.ts'], {
     env: {
+      NODE_ENV: 'development',
       PATH: process.env.PATH,
       PORT: '0',
       LOG_LEVEL: 'info',

@@ -28,7 +28,7 @@ function namesIn(router: Router): string[] {
   })
 }
 
-const call = (method: string, path: string, bearer: object = {}) => {
+const call = (method: string, path: string, bearer: Readonly<Record<string, string>> = {}) => {
   const address = `/api/v1${path.replace(/:token/, 'x'.repeat(43)).replace(/:\w+/g, SOME_ID)}`
   return testApp.http[method.toLowerCase() as 'get'](address).set(bearer)
 }
@@ -50,7 +50,7 @@ describe('the route table', () => {
   })
 
   it('refuses every role that an endpoint is not for', async () => {
-    const people = new Map<Role, object>()
+    const people = new Map<Role, Readonly<Record<string, string>>>()
     for (const role of ROLES) {
       people.set(role, (await signInAs(testApp, await buildPerson(testApp, { roles: [role] }))).bearer)
     }
