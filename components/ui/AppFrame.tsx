@@ -98,7 +98,11 @@ function TabBar({ entries, currentPath, onNavigate }: AppFrameProps) {
     <View
       role="navigation"
       aria-label={t('common.mainNavigation')}
-      style={[styles.tabs, { backgroundColor: colours.panel, borderColor: colours.rule }]}
+      style={[
+        styles.tabs,
+        { backgroundColor: colours.panel, borderColor: colours.rule },
+        webOnly({ paddingBottom: 'env(safe-area-inset-bottom)' }),
+      ]}
     >
       {tabs.map((entry) => (
         <TabLink key={entry.href} entry={entry} isCurrent={entry === current} onNavigate={onNavigate} />

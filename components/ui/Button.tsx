@@ -50,7 +50,7 @@ export function Button(props: ButtonProps) {
       onPress={(event) => {
         if (!href || keepInApp(event)) onPress?.()
       }}
-      {...webOnly({ href, 'aria-pressed': props.pressed, dataSet: { motion: '' } })}
+      {...webOnly({ href, 'aria-pressed': props.pressed, dataSet: { motion: '', printHide: '' } })}
       style={({ pressed }) => [
         styles.button,
         kind === 'quiet' && styles.quiet,

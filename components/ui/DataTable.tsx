@@ -252,6 +252,7 @@ function BodyRow<Row>({ row, table }: BodyRowProps<Row>) {
       style={[
         styles.row,
         { borderColor: colours.hairline },
+        onPressRow && styles.pressable,
         onPressRow && webOnly({ cursor: 'pointer' }),
         isSelected && { backgroundColor: colours.sunken },
       ]}
@@ -270,6 +271,7 @@ const styles = StyleSheet.create({
   wide: { flexGrow: 1 },
   table: { flexGrow: 1 },
   row: { flexDirection: 'row', alignItems: 'center', borderBottomWidth: 1, minHeight: 40 },
+  pressable: { minHeight: TARGET },
   headRow: { borderBottomWidth: 1.5 },
   totals: { borderTopWidth: 1.5, borderBottomWidth: 0 },
   cell: { flexBasis: 0, paddingHorizontal: SPACE.small, paddingVertical: SPACE.small },

@@ -28,7 +28,7 @@ export function IconButton({ icon, label, onPress, disabled = false, pressed, fr
       aria-disabled={disabled}
       disabled={disabled}
       onPress={onPress}
-      {...webOnly({ title: label, 'aria-pressed': pressed, dataSet: { motion: '' } })}
+      {...webOnly({ title: label, 'aria-pressed': pressed, dataSet: { motion: '', printHide: '' } })}
       style={[
         styles.square,
         { backgroundColor: fill, borderColor: framed ? colours.rule : 'transparent' },

@@ -115,6 +115,7 @@ function Header({ title, subtitle, right, onBack }: ScreenProps) {
         styles.header,
         isWide && styles.headerWide,
         { borderColor: colours.rule, backgroundColor: colours.ground },
+        webOnly({ paddingTop: `max(${SPACE.large}px, env(safe-area-inset-top))` }),
       ]}
     >
       {onBack ? (

@@ -1,6 +1,7 @@
 import { createContext, useContext, useEffect, useMemo, useState, type ReactNode } from 'react'
 import { useColorScheme } from 'react-native'
 import { applyThemeToDocument } from '@/components/ui/web/applyThemeToDocument'
+import { usePrinting } from '@/components/ui/web/usePrinting'
 import { deviceStorage, type ChoiceStorage } from './deviceStorage'
 import { THEMES, type Theme, type ThemeName } from './tokens'
 
@@ -32,12 +33,16 @@ interface ThemeProviderProps {
   readonly storage?: ChoiceStorage
 }
 
-/** Gives every component below it the theme that the person chose, and keeps the choice on the device. */
+/**
+ * Gives every component below it the theme that the person chose, and keeps the choice on the device. Paper is always
+ * limewash.
+ */
 export function ThemeProvider({ children, storage }: ThemeProviderProps) {
   const [kept] = useState(() => storage ?? deviceStorage())
   const [choice, setChoice] = useState(() => readChoice(kept))
   const systemIsNight = useColorScheme() === 'dark'
-  const theme = THEMES[themeName(choice, systemIsNight)]
+  const isPrinting = usePrinting()
+  const theme = isPrinting ? THEMES.limewash : THEMES[themeName(choice, systemIsNight)]
 
   useEffect(() => applyThemeToDocument(theme), [theme])
 

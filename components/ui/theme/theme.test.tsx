@@ -59,6 +59,17 @@ describe('ThemeProvider', () => {
     expect(document.querySelector<HTMLMetaElement>('meta[name="theme-color"]')?.content).toBe('#20292E')
   })
 
+  it('is limewash on paper, whatever the choice', () => {
+    const { result } = render(storageHolding('{"look":"night"}'))
+    expect(result.current.theme.name).toBe('night')
+
+    act(() => void window.dispatchEvent(new Event('beforeprint')))
+    expect(result.current.theme.name).toBe('limewash')
+
+    act(() => void window.dispatchEvent(new Event('afterprint')))
+    expect(result.current.theme.name).toBe('night')
+  })
+
   it.each(['{', 'null', '{"look":"plaid"}', '7'])('starts with the plain look when what was kept is %s', (kept) => {
     expect(render(storageHolding(kept)).result.current.theme.name).toBe('limewash')
   })

@@ -11,7 +11,7 @@ export function applyThemeToDocument({ colours, isNight }: Theme): void {
   root.style.backgroundColor = colours.ground
   root.style.colorScheme = isNight ? 'dark' : 'light'
   document.body.style.backgroundColor = colours.ground
-  themeColourMeta().content = colours.ground
+  for (const meta of themeColourMetas()) meta.content = colours.ground
   styleElement().textContent = `
 :focus-visible { outline: 3px solid ${colours.selection} !important; outline-offset: 2px; border-radius: ${RADIUS}px; }
 [data-inset-focus]:focus-visible { outline-offset: -3px; }
@@ -43,11 +43,12 @@ function styleElement(): HTMLStyleElement {
   return made
 }
 
-function themeColourMeta(): HTMLMetaElement {
-  const known = document.querySelector<HTMLMetaElement>('meta[name="theme-color"]')
-  if (known) return known
+/** The metas of the page, which may hold one for day and one for night; one of our own where there is none. */
+function themeColourMetas(): readonly HTMLMetaElement[] {
+  const known = [...document.querySelectorAll<HTMLMetaElement>('meta[name="theme-color"]')]
+  if (known.length > 0) return known
   const made = document.createElement('meta')
   made.name = 'theme-color'
   document.head.append(made)
-  return made
+  return [made]
 }
