@@ -2,7 +2,7 @@ import type { Scope } from '@/server/database'
 import { curvatureRadii } from '@/shared/compute/spatial/curvatureRadii'
 
 /** Gap [m] that a block bridges: closer buildings belong together, a street is wider. */
-const GAP_M = 8
+const GAP_M = 6
 /** A block of more outlines than this is cut into parts of about {@link PART}, so that a beat can be shared out. */
 const LARGEST = 60
 const PART = 40
