@@ -6,7 +6,7 @@ export const SOURCES = ['streets', 'outlines', 'areas', 'position', 'draft'] as 
 export type SourceName = (typeof SOURCES)[number]
 
 /** Below this zoom the lines of a hatch would run together, and the plain ground is drawn. */
-const HATCH_FROM_ZOOM = 15
+const HATCH_FROM_ZOOM = 16.5
 const LABEL_FONT = ['Barlow_600SemiBold', 'sans-serif']
 
 /** The whole style: our own sources only, no tiles, no glyphs, no sprites. Labels are drawn from fonts of the page. */
