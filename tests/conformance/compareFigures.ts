@@ -1,3 +1,5 @@
+import { ShownInPart } from './shownInPart'
+
 /** How far a computed figure may lie from the expected one; a missing bound is 0. */
 export interface Tolerance {
   readonly rel?: number
@@ -27,6 +29,7 @@ const PLANAR_REL = 1e-3
  * @returns every figure that disagrees; an empty list when all agree
  */
 export function compareFigures(got: unknown, expected: unknown, tolerance: Tolerance, key = ''): Disagreement[] {
+  if (got instanceof ShownInPart) return compareFigures(got.figuresFor(expected), expected, tolerance, key)
   if (typeof expected === 'number') return isClose(got, expected, tolerance, key) ? [] : [{ key, got, expected }]
   if (Array.isArray(expected)) return compareLists(got, expected, tolerance, key)
   if (isRecord(expected)) return compareRecords(got, expected, tolerance, key)

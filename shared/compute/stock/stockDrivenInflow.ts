@@ -1,6 +1,8 @@
 import { ComputeError } from '@/shared/compute/errors'
 import type { SurvivalTable } from '@/shared/compute/lifetime/survivalTable'
 
+const ROUNDING = 1e-13
+
 /** Part of the stock that stands before the first year. */
 export interface OpeningCohort {
   /** Whole years since its construction at the end of the year before the first, ≥ 0: table entry. */
@@ -71,7 +73,7 @@ export function stockDrivenInflow({
     const asked = stock[year]!
     if (!(asked >= 0 && asked < Infinity)) throw new ComputeError('negative-amount', { year, stock: asked })
     course.outflow[year] = ageOneYear(cohorts, table)
-    const missing = asked - cohorts.reduce((total, { amount }) => total + amount, 0)
+    const missing = withoutRounding(asked - cohorts.reduce((total, { amount }) => total + amount, 0), asked)
     if (missing >= 0) {
       const built = missing / yieldOfYear
       course.inflow[year] = built
@@ -83,6 +85,11 @@ export function stockDrivenInflow({
     }
   }
   return course
+}
+
+/** A difference that is nothing but the rounding of its parts is no demolition. */
+function withoutRounding(difference: number, of: number): number {
+  return Math.abs(difference) <= ROUNDING * of ? 0 : difference
 }
 
 interface Cohort {
