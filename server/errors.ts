@@ -11,6 +11,8 @@ export class Refusal extends Error {
     readonly detail: string,
     readonly faults: readonly Fault[] = [],
     readonly headers: Readonly<Record<string, string>> = {},
+    /** Number the server waits for, where the refusal is about a number. */
+    readonly expected?: number,
   ) {
     super(`${status} ${code}`)
   }
@@ -34,6 +36,7 @@ export function toProblem(refusal: Refusal, requestId?: string): Problem {
     code: refusal.code,
     detail: refusal.detail,
     faults: [...refusal.faults],
+    ...(refusal.expected === undefined ? {} : { expected: refusal.expected }),
     ...(requestId === undefined ? {} : { requestId }),
   }
 }

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { editionForDevice } from '@/shared/schemas/factorBook'
-import { id, moment } from '@/shared/schemas/primitives'
+import { id, moment, typedText } from '@/shared/schemas/primitives'
 import { change, mutationOutcome, PULL_LIMIT, PUSH_LIMIT } from '@/shared/schemas/sync'
 import { defineEndpoint, nothing } from './defineEndpoint'
 
@@ -53,6 +53,21 @@ export const pullChanges = defineEndpoint({
     serverTime: moment,
     minSchema: z.number().int(),
   }),
+})
+
+/**
+ * A phone whose numbers stand for other work (restored from a copy, or copied) takes a new device id and numbers its bag
+ * from 1, with the same mutation ids. The session goes on under the new id; asking twice with one id is harmless.
+ */
+export const renewDevice = defineEndpoint({
+  method: 'POST',
+  path: '/sync/device',
+  audience: ['surveyor'],
+  summary: 'Go on in this session under a new device id.',
+  params: nothing,
+  query: nothing,
+  body: z.object({ deviceId: id, name: typedText(120) }),
+  response: z.object({ accessToken: z.string(), expiresInS: z.number().int() }),
 })
 
 /** The factor book as the device needs it for the instant estimate. */

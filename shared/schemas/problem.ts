@@ -12,6 +12,8 @@ export const problem = z.object({
   code: z.string(),
   detail: z.string(),
   faults: z.array(fault).default([]),
+  /** Number the server waits for: the next sequence number of a device, or the offset of an upload. */
+  expected: z.number().int().optional(),
   requestId: z.string().optional(),
 })
 export type Problem = z.infer<typeof problem>
