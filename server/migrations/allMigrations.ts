@@ -3,6 +3,7 @@ import { m0002Field } from './m0002Field'
 import { m0003Planning } from './m0003Planning'
 import { m0004Sessions } from './m0004Sessions'
 import { m0005OutlineBlocks } from './m0005OutlineBlocks'
+import { m0006Sync } from './m0006Sync'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
@@ -12,4 +13,5 @@ export const allMigrations: readonly Migration[] = [
   m0003Planning,
   m0004Sessions,
   m0005OutlineBlocks,
+  m0006Sync,
 ]
