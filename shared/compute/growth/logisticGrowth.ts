@@ -15,7 +15,7 @@ export interface LogisticGrowth {
  *
  * @param timeYears t since the start [yr]
  * @returns between start and ceiling, in their unit
- * @throws {ComputeError} `parameter-not-positive`, `not-a-number`
+ * @throws {ComputeError} `parameter-not-positive`, `not-a-number`; `parameter-out-of-range` before a path that falls began
  * @see Verhulst, P.-F. (1838). Notice sur la loi que la population suit dans son accroissement.
  * @example
  * logisticGrowth(0, { start: 20, ceiling: 45, ratePerYear: 0.06 }) // => 20
@@ -25,5 +25,12 @@ export function logisticGrowth(timeYears: number, { start, ceiling, ratePerYear 
   for (const [name, value] of Object.entries({ start, ceiling, ratePerYear })) {
     if (!(value > 0 && value < Infinity)) throw new ComputeError('parameter-not-positive', { [name]: value })
   }
-  return ceiling / (1 + ((ceiling - start) / start) * Math.exp(-ratePerYear * timeYears))
+  const exponent = -ratePerYear * timeYears
+  const value =
+    timeYears < 0
+      ? ceiling / (1 + ((ceiling - start) / start) * Math.exp(exponent))
+      : // the same with terms that are all positive, for a start far above the ceiling
+        (ceiling * start) / (ceiling * Math.exp(exponent) - start * Math.expm1(exponent))
+  if (!(value >= 0)) throw new ComputeError('parameter-out-of-range', { timeYears, start, ceiling, ratePerYear })
+  return value
 }

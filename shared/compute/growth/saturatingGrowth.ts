@@ -24,5 +24,7 @@ export function saturatingGrowth(timeYears: number, { start, ceiling, ratePerYea
   if (!Number.isFinite(timeYears)) throw new ComputeError('not-a-number', { timeYears })
   if (!(ratePerYear > 0 && ratePerYear < Infinity)) throw new ComputeError('parameter-not-positive', { ratePerYear })
   if (!(start >= 0 && ceiling >= 0)) throw new ComputeError('negative-amount', { start, ceiling })
-  return ceiling - (ceiling - start) * Math.exp(-ratePerYear * timeYears)
+  const exponent = -ratePerYear * timeYears
+  // two terms that are positive ahead of the start, rather than a difference
+  return start * Math.exp(exponent) - ceiling * Math.expm1(exponent)
 }

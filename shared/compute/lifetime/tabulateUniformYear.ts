@@ -4,6 +4,9 @@ import { lifetimeLaw } from './lifetimeLaw'
 import type { Lifetime } from './lifetime.types'
 import { survivalTable, type SurvivalTable } from './survivalTable'
 
+/** Above this hazard all falls within minutes of the year's start, and ∫S is S over the hazard. */
+const STEEPEST_PER_YEAR = 1e5
+
 /**
  * Survival of a cohort whose construction is spread evenly through its year: entry j is the share standing at the
  * end of the j-th year after the construction year,
@@ -14,7 +17,7 @@ import { survivalTable, type SurvivalTable } from './survivalTable'
  * @param length number of years, ≥ 1
  * @returns a table like that of `tabulateSurvival`, for a check of the mid-year rule (o = 0.5), which differs by O(f′/24)
  * @throws {ComputeError} `parameter-not-positive`, `negative-age`, `empty-input`
- * @remarks relative error below 1e-12; exact for a fixed lifetime
+ * @remarks relative error below 1e-12, exact for a fixed lifetime
  * @see Takahasi, H. & Mori, M. (1974), the quadrature; the convention is common practice of stock models.
  * @example
  * tabulateUniformYear({ model: 'fixed', lifetimeYears: 1.5 }, 0, 3).survival // => [1, 0.5, 0]
@@ -37,6 +40,8 @@ function logMeanOverYear(lifetime: Lifetime): (year: number) => number {
   return (year) => {
     const start = year > 0 ? law.logSurvival(year) : 0
     if (start === -Infinity) return -Infinity
+    const hazard = law.hazardPerYear(year)
+    if (hazard > STEEPEST_PER_YEAR && hazard < Infinity && year > 0) return start - Math.log(hazard)
     // relative to its start, so that an integral smaller than any double still has a logarithm
     return start + Math.log(integral((age) => Math.exp(law.logSurvival(age) - start), { low: year, high: year + 1 }))
   }

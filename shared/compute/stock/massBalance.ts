@@ -25,12 +25,15 @@ export interface BalanceRow {
 
 /** Largest relative residual of a run that may be shown. */
 export const BALANCE_TOLERANCE = 1e-9
-/** A stock this much larger than its flows rounds its own change. */
-const STOCK_SCALE = 1e-3
+/** What a process once held or moved rounds what little is left of it later. */
+const PEAK_SCALE = 1e-3
+/** Below this a double has no digits left to be relative to. */
+const LEAST_SCALE = 1e-290
 
 /**
  * Mass balance of every process and year, inflow − outflow = Δstock, as the table that goes with a run. The residual
- * is taken relative to the largest of inflow, outflow, stock change and a thousandth of the stock.
+ * is taken relative to the largest of inflow, outflow, stock change and a thousandth of the largest stock or flow that
+ * the process has had so far.
  *
  * @returns one row a process and year
  * @throws {ComputeError} `mass-not-balanced` naming process and year when a relative residual exceeds 1e−9 or is not a
@@ -45,29 +48,23 @@ export function massBalance(processes: readonly ProcessCourse[]): BalanceRow[] {
     if (outflow.length !== inflow.length || (stock && stock.length !== inflow.length)) {
       throw new ComputeError('length-mismatch', { process, inflow: inflow.length, outflow: outflow.length })
     }
+    let peak = Math.abs(openingStock)
     return Array.from({ length: inflow.length }, (_, year): BalanceRow => {
+      const row = { process, year, inflow: inflow[year]!, outflow: outflow[year]! }
       const [before, now] = stock ? [year === 0 ? openingStock : stock[year - 1]!, stock[year]!] : [0, 0]
-      return balanced({ process, year, inflow: inflow[year]!, outflow: outflow[year]! }, before, now)
+      peak = Math.max(peak, Math.abs(row.inflow), Math.abs(row.outflow), Math.abs(now))
+      return balanced({ ...row, stockChange: now - before }, peak)
     })
   })
 }
 
-function balanced(
-  row: { process: string; year: number; inflow: number; outflow: number },
-  before: number,
-  now: number,
-): BalanceRow {
-  const stockChange = now - before
-  const residual = row.inflow - row.outflow - stockChange
-  const scale = Math.max(
-    Math.abs(row.inflow),
-    Math.abs(row.outflow),
-    Math.abs(stockChange),
-    STOCK_SCALE * Math.max(Math.abs(before), Math.abs(now)),
-  )
-  const relativeResidual = residual === 0 ? 0 : Math.abs(residual) / scale
+function balanced(row: Omit<BalanceRow, 'residual' | 'relativeResidual'>, peak: number): BalanceRow {
+  const { inflow, outflow, stockChange } = row
+  const residual = inflow - outflow - stockChange
+  const scale = Math.max(Math.abs(inflow), Math.abs(outflow), Math.abs(stockChange), PEAK_SCALE * peak, LEAST_SCALE)
+  const relativeResidual = Math.abs(residual) / scale
   if (!(relativeResidual <= BALANCE_TOLERANCE)) {
-    throw new ComputeError('mass-not-balanced', { ...row, stockChange, residual, relativeResidual })
+    throw new ComputeError('mass-not-balanced', { ...row, residual, relativeResidual })
   }
-  return { ...row, stockChange, residual, relativeResidual }
+  return { ...row, residual, relativeResidual }
 }

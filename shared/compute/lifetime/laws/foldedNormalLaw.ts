@@ -1,3 +1,4 @@
+import erfc from '@stdlib/math-base-special-erfc'
 import { bracketedRoot } from '@/shared/compute/lifetime/bracketedRoot'
 import { foldedNormalShape } from '@/shared/compute/lifetime/foldedNormalShape'
 import type { FoldedNormalLifetime, LifetimeLaw, LifetimeMoments } from '@/shared/compute/lifetime/lifetime.types'
@@ -21,8 +22,9 @@ export function foldedNormalLaw({ parentMeanYears, parentSdYears }: FoldedNormal
   const centre = Math.abs(parentMeanYears) / parentSdYears
   const logSurvival = (ageYears: number): number => {
     const z = ageYears / parentSdYears
+    if (z < centre) return Math.log1p(-Math.max(0, leftShare(z, centre)))
     const upper = logNormalTail(z - centre)
-    return upper + Math.log1p(Math.exp(logNormalTail(z + centre) - upper))
+    return upper === -Infinity ? upper : upper + Math.log1p(Math.exp(logNormalTail(z + centre) - upper))
   }
   const hazardPerYear = (ageYears: number): number => {
     const z = ageYears / parentSdYears
@@ -36,4 +38,9 @@ export function foldedNormalLaw({ parentMeanYears, parentSdYears }: FoldedNormal
     return { meanYears, sdYears: sd * parentSdYears, medianYears }
   }
   return { logSurvival, hazardPerYear, moments }
+}
+
+/** 1 − S, small where S is near 1: Φ(z − α) − Φ(−z − α). */
+function leftShare(z: number, centre: number): number {
+  return 0.5 * (erfc((centre - z) * Math.SQRT1_2) - erfc((centre + z) * Math.SQRT1_2))
 }

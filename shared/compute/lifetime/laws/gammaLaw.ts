@@ -1,8 +1,6 @@
-import gammaincinv from '@stdlib/math-base-special-gammaincinv'
-import gammaln from '@stdlib/math-base-special-gammaln'
+import { bracketedRoot } from '@/shared/compute/lifetime/bracketedRoot'
 import type { GammaLifetime, LifetimeLaw } from '@/shared/compute/lifetime/lifetime.types'
-import { logPower } from '@/shared/compute/lifetime/logPower'
-import { logUpperGamma } from '@/shared/compute/lifetime/logUpperGamma'
+import { gammaTail } from '@/shared/compute/lifetime/gammaTail'
 import { requirePositive } from '@/shared/compute/lifetime/requirePositive'
 
 /**
@@ -15,18 +13,14 @@ import { requirePositive } from '@/shared/compute/lifetime/requirePositive'
  */
 export function gammaLaw({ shape, scaleYears }: GammaLifetime): LifetimeLaw {
   requirePositive({ shape, scaleYears })
-  const logGamma = gammaln(shape)
-  const logSurvival = (ageYears: number) => logUpperGamma(shape, ageYears / scaleYears)
+  const logSurvival = (ageYears: number) => gammaTail(shape, ageYears / scaleYears).logTail
   return {
     logSurvival,
-    hazardPerYear: (ageYears) => {
-      const x = ageYears / scaleYears
-      return Math.exp(logPower(x, shape - 1) - x - logGamma - logSurvival(ageYears)) / scaleYears
-    },
+    hazardPerYear: (ageYears) => gammaTail(shape, ageYears / scaleYears).hazard / scaleYears,
     moments: () => ({
       meanYears: shape * scaleYears,
       sdYears: Math.sqrt(shape) * scaleYears,
-      medianYears: scaleYears * gammaincinv(0.5, shape),
+      medianYears: bracketedRoot((age) => logSurvival(age) + Math.LN2, 0, shape * scaleYears),
     }),
   }
 }
