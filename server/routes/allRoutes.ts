@@ -5,6 +5,7 @@ import { healthRoutes } from './health/healthRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
+import { syncRoutes } from './sync/syncRoutes'
 
 /** The routes of every resource; each knows its endpoints of the contract. */
 export const allRoutes: readonly ((context: Context) => Router)[] = [
@@ -13,4 +14,5 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   peopleRoutes,
   outlineRoutes,
   roundRoutes,
+  syncRoutes,
 ]
