@@ -10,6 +10,8 @@ const anyStructure = z.enum([...STRUCTURES, 'all'])
 /** Kilograms of a material per m² of gross floor area of an archetype. A null median is "missing", never zero. */
 export const intensityRow = z.object({
   rowId: id,
+  /** Rows taken from one published figure share its error fully. */
+  figureId: id,
   structure: anyStructure,
   use: anyUse,
   /** Id of a construction period of the vocabulary, or all. */
