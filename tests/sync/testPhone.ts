@@ -67,7 +67,8 @@ export function testPhone(testApp: TestApp, person: SignedInPerson): TestPhone {
       const answer = await testApp.http
         .post('/api/v1/sync/push')
         .set(person.bearer)
-        .send({ deviceId: person.deviceId, schema: 1, batch })
+        .type('json')
+        .send(JSON.stringify({ deviceId: person.deviceId, schema: 1, batch }))
       if (answer.status !== 200) throw Object.assign(new Error(`push ${answer.status}`), answer.body)
       const parsed = pushMutations.response.parse(answer.body)
       for (const result of parsed.results) {
