@@ -129,18 +129,24 @@ function drawStructure(random: Random, use: Use, year: number): Structure {
       ['masonry-timber-floors', 30],
       ['steel-frame', 15],
     ] as const)
+  return year < 1946 ? drawOldStructure(random, year) : drawNewStructure(random, use, year)
+}
+
+function drawOldStructure(random: Random, year: number): Structure {
   if (year < 1919)
     return choose(random, [
       ['masonry-timber-floors', 90],
       ['timber-frame', 8],
       ['earth', 2],
     ] as const)
-  if (year < 1946)
-    return choose(random, [
-      ['masonry-timber-floors', 60],
-      ['masonry-concrete-floors', 30],
-      ['timber-frame', 10],
-    ] as const)
+  return choose(random, [
+    ['masonry-timber-floors', 60],
+    ['masonry-concrete-floors', 30],
+    ['timber-frame', 10],
+  ] as const)
+}
+
+function drawNewStructure(random: Random, use: Use, year: number): Structure {
   if (use === 'single-family' || use === 'terraced')
     return choose(random, [
       ['masonry-concrete-floors', 62],

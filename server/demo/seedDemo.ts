@@ -1,34 +1,15 @@
 import { mkdir } from 'node:fs/promises'
 import { hash } from '@node-rs/argon2'
 import { Sequelize, type Transaction } from 'sequelize'
-import { stableId } from '@/server/stableId'
 import { publishedEdition } from '@/server/factorBook/publishedEdition'
 import { editionToRows } from '@/server/factorBook/editionToRows'
 import { demoRandom } from './demoRandom'
 import { insertRows } from './insertRows'
 import { layOutTown } from './layOutTown'
+import { demoId, type SeededBuilding, type Seeding } from './seeding.types'
 import { seedRounds } from './seedRounds'
 import { footprintM2, innerPointText, toMultiPolygonText } from './townGeometry'
 import { DEMO_ORGANISATION, DEMO_PASSWORD, DEMO_PEOPLE, DISTRICTS } from './townNames'
-import type { TownBuilding } from './town.types'
-
-/** Where the seeding of one organisation stands. */
-export interface Seeding {
-  readonly sequelize: Sequelize
-  readonly transaction: Transaction
-  readonly organisationId: string
-  readonly photoRoot: string
-  /** Next change number of the organisation. */
-  nextChange(): number
-}
-
-export interface SeededBuilding extends TownBuilding {
-  readonly outlineId: string
-  readonly blockId: string
-  readonly footprintM2: number
-}
-
-export const demoId = (...parts: readonly (string | number)[]) => stableId('demo', ...parts)
 
 /**
  * Loads the invented town Saltmarsh Hythe, whole or not at all, as the owner of the tables.

@@ -29,7 +29,7 @@ export function surveyBuilding(
     basement: chance(random, 0.4)
       ? { floorShare: null }
       : { floorShare: building.basementShare, knownBy: chance(random, 0.5) ? 'told' : 'seen' },
-    constructionYear: surveyYear(random, building),
+    constructionYear: surveyYear(random, building, inYear),
     condition: { condition: building.condition, knownBy: 'seen' },
     vacancy: { vacancy: building.vacancy, knownBy: 'seen' },
     ...(building.isProtected ? { protection: { isProtected: true, knownBy: 'register' as const } } : {}),
@@ -57,7 +57,11 @@ function surveyStructure(random: Random, building: TownBuilding): NonNullable<Sh
   }
 }
 
-function surveyYear(random: Random, building: TownBuilding): NonNullable<SheetAnswers['constructionYear']> {
+function surveyYear(
+  random: Random,
+  building: TownBuilding,
+  inYear: number,
+): NonNullable<SheetAnswers['constructionYear']> {
   if (chance(random, 0.5)) return { kind: 'exact', year: building.year, knownBy: 'register' }
   if (chance(random, 0.14)) return { kind: 'unknown' }
   const period = PERIODS.find(
@@ -72,7 +76,7 @@ function surveyYear(random: Random, building: TownBuilding): NonNullable<SheetAn
   return {
     kind: 'between',
     fromYear,
-    toYear: Math.min((period?.toYear ?? 2_027) - 1, building.year + half, 2_025),
+    toYear: Math.min((period?.toYear ?? 2_027) - 1, building.year + half, inYear),
     knownBy: 'guessed',
   }
 }

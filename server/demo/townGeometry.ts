@@ -38,7 +38,7 @@ export function innerPointText(corners: readonly Corner[]): string {
 
 /** Footprint on the ellipsoid [m²]. */
 export function footprintM2(corners: readonly Corner[]): number {
-  return Math.round(Math.abs(localPlaneArea([toRing(corners)])) * 10) / 10
+  return Math.round(Math.abs(localPlaneArea(toRing(corners))) * 10) / 10
 }
 
 function isClockwise(corners: readonly Corner[]): boolean {

@@ -1,5 +1,6 @@
 import type { Material, Structure, Use } from '@/shared/compute/factors/vocabulary'
 import type { IntensityRow } from '@/shared/schemas/factorBook'
+import { DEFAULT_SHARED_CV } from '@/shared/compute/factors/sharedCvDefaults'
 import { optionalNumber, readCsv, toProvenance } from './readCsv'
 import { stableId } from '@/server/stableId'
 import { splitByComponent } from './splitByComponent'
@@ -49,23 +50,6 @@ const TABLE_FUNCTION: readonly (readonly [Use | 'all', string])[] = [
 
 /** Fewer buildings than this say too little: the next wider figure is taken, or none. */
 const LEAST_BUILDINGS = 10
-
-/** Error of a mean factor, common practice: mineral materials are known best, services worst. */
-const SHARED_CV: Readonly<Partial<Record<Material, number>>> = {
-  concrete: 0.22,
-  'masonry-units': 0.25,
-  'mortar-plaster': 0.25,
-  ceramics: 0.25,
-  glass: 0.25,
-  steel: 0.3,
-  timber: 0.3,
-  gypsum: 0.4,
-  'mineral-insulation': 0.5,
-  plastics: 0.6,
-  bitumen: 0.5,
-  aluminium: 0.5,
-  copper: 0.5,
-}
 
 const BASIS_NOTE = 'Basis taken as gross floor area; part of the source does not state it.'
 
@@ -118,13 +102,7 @@ function toRow(row: TableRow, structure: Structure | 'all', use: Use | 'all', ma
   const medianKgPerM2 = optionalNumber(row['median'])
   return {
     rowId: stableId('intensity', structure, use, material),
-    figureId: stableId(
-      'figure',
-      row['structure'] ?? '',
-      row['function'] ?? '',
-      row['material'] ?? '',
-      row['region'] ?? '',
-    ),
+    figureId: stableId('figure', ...['structure', 'function', 'material', 'region'].map((column) => row[column] ?? '')),
     structure,
     use,
     period: 'all',
@@ -134,10 +112,10 @@ function toRow(row: TableRow, structure: Structure | 'all', use: Use | 'all', ma
     areaBasis: 'GFA',
     medianKgPerM2,
     meanKgPerM2: optionalNumber(row['mean']) ?? medianKgPerM2,
-    p10KgPerM2: optionalNumber(row['p10']) ?? optionalNumber(row['p25']),
-    p90KgPerM2: optionalNumber(row['p90']) ?? optionalNumber(row['p75']),
+    p10KgPerM2: optionalNumber(row['p10']),
+    p90KgPerM2: optionalNumber(row['p90']),
     gsdBetweenBuildings: optionalNumber(row['gsd_between_buildings']),
-    sharedCv: SHARED_CV[material] ?? 0.5,
+    sharedCv: DEFAULT_SHARED_CV[material],
     sampleCount: optionalNumber(row['n']),
     source: row['source'] ?? '',
     provenance: toProvenance(row['provenance']),

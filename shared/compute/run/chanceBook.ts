@@ -1,10 +1,12 @@
 import type { Component } from '@/shared/compute/factors/vocabulary'
 import { ComputeError } from '@/shared/compute/errors'
 import type { Lifetime } from '@/shared/compute/lifetime/lifetime.types'
+import type { SurvivalTable } from '@/shared/compute/lifetime/survivalTable'
+import { tabulateSurvival } from '@/shared/compute/lifetime/tabulateSurvival'
+import { comingDownFromTable } from '@/shared/compute/stock/comingDownFromTable'
+import { newComponentRenewals } from '@/shared/compute/stock/newComponentRenewals'
+import type { YearWeight } from '@/shared/compute/stock/stock.types'
 import type { Archetype, BuildingCell, LifetimeUse, YearsAheadConventions } from './run.types'
-import { renewalDensity } from './renewalDensity'
-import { standingChances, type YearWeight } from './standingChances'
-import { survivalTable, type SurvivalTable } from './survivalTable'
 
 /** A yearly series under the life as given, and with its mean one standard error shorter and longer. */
 export interface ThreeWays {
@@ -36,9 +38,11 @@ export function makeChanceBook(
   const { surveyYear, horizonYears, yearOffset } = conventions
   const length = oldestAge(cells, archetypes, conventions) + horizonYears + 2
   const tables = new Map<Lifetime, SurvivalTable>()
-  const tableOf = (lifetime: Lifetime) => remember(tables, lifetime, () => survivalTable(lifetime, yearOffset, length))
+  const tableOf = (lifetime: Lifetime) =>
+    remember(tables, lifetime, () => tabulateSurvival(lifetime, yearOffset, length))
   const densities = new Map<Lifetime, Float64Array>()
-  const densityOf = (lifetime: Lifetime) => remember(densities, lifetime, () => renewalDensity(tableOf(lifetime)))
+  const densityOf = (lifetime: Lifetime) =>
+    remember(densities, lifetime, () => newComponentRenewals(lifetime, length).all)
   const chancesByKey = new Map<string, CellChances>()
   const renewalsByKey = new Map<string, ThreeWays>()
 
@@ -46,8 +50,7 @@ export function makeChanceBook(
     const { life } = archetypes[cell.archetype]!
     return remember(chancesByKey, keyOf(cell, life.lifetimeId), () => {
       const years = possibleYears(cell, conventions)
-      const one = (lifetime: Lifetime) =>
-        standingChances(tableOf(lifetime), years, surveyYear, cell.hazardMultiplier, horizonYears)
+      const one = (lifetime: Lifetime) => chancesOver(years, tableOf(lifetime), cell, conventions)
       const [given, shorter, longer] = [one(life.lifetime), one(life.shorter), one(life.longer)]
       return {
         given: given.comingDown,
@@ -74,6 +77,23 @@ export function makeChanceBook(
   return { comingDown, renewals }
 }
 
+/** Chances averaged over the possible construction years. */
+function chancesOver(
+  years: readonly YearWeight[],
+  table: SurvivalTable,
+  { hazardMultiplier }: BuildingCell,
+  { surveyYear, horizonYears }: YearsAheadConventions,
+): { comingDown: Float64Array; overdueShare: number } {
+  const comingDown = new Float64Array(horizonYears)
+  let overdueShare = 0
+  for (const { year, weight } of years) {
+    const one = comingDownFromTable(table, surveyYear - year, horizonYears, { hazardMultiplier })
+    for (let k = 0; k < horizonYears; k++) comingDown[k]! += weight * one.chances[k]!
+    overdueShare += weight * one.overdueShare
+  }
+  return { comingDown, overdueShare }
+}
+
 function threeWays(life: LifetimeUse, one: (lifetime: Lifetime) => Float64Array): ThreeWays {
   return { given: one(life.lifetime), shorter: one(life.shorter), longer: one(life.longer) }
 }
@@ -87,7 +107,7 @@ function renewalsAhead(
 ): Float64Array {
   return downSoFar.map((down, k) => {
     let rate = 0
-    for (const { year, weight } of years) rate += weight * density[surveyYear - year + k + 1]!
+    for (const { year, weight } of years) rate += weight * density[surveyYear - year + k]!
     return (1 - down) * rate
   })
 }

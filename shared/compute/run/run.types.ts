@@ -1,6 +1,6 @@
 import type { Component, Material, StructureOrUnknown, UseOrUnknown } from '@/shared/compute/factors/vocabulary'
 import type { Lifetime } from '@/shared/compute/lifetime/lifetime.types'
-import type { YearWeight } from './standingChances'
+import type { YearWeight } from '@/shared/compute/stock/stock.types'
 
 /** One material intensity as an archetype uses it. */
 export interface FactorUse {

@@ -1,0 +1,156 @@
+import { periodOfYear } from '@/shared/compute/factors/periodOfYear'
+import type { IntensityFigure } from '@/shared/compute/factors/intensity.types'
+import {
+  UNKNOWN,
+  type Material,
+  type PeriodIdOrUnknown,
+  type StructureOrUnknown,
+  type UseOrUnknown,
+} from '@/shared/compute/factors/vocabulary'
+import { ComputeError } from '@/shared/compute/errors'
+import type { YearWeight } from '@/shared/compute/stock/stock.types'
+import { resolveArchetype, type LifetimeFigure, type ResolvedArchetype } from './resolveArchetype'
+import type { BuildingCell, YearsAheadConventions } from './run.types'
+import { stockOfCells, type StockEstimate } from './stockOfCells'
+import { yearsAheadOfCells, type YearsAhead } from './yearsAheadOfCells'
+
+/** A recorded building as a run takes it. */
+export interface SurveyedBuilding {
+  readonly buildingId: string
+  readonly use: UseOrUnknown
+  readonly structure: StructureOrUnknown
+  readonly yearFrom: number | null
+  readonly yearTo: number | null
+  readonly grossFloorAreaM2: number
+  readonly floorAreaCv: number
+  readonly hazardMultiplier: number
+}
+
+export interface DistrictConventions {
+  readonly surveyYear: number
+  readonly horizonYears: number
+  readonly yearOffset: number
+}
+
+export interface DistrictComputation {
+  readonly archetypes: readonly ResolvedArchetype[]
+  /** One cell a building, in their order: receipts end here. */
+  readonly cells: readonly BuildingCell[]
+  readonly stock: StockEstimate
+  readonly yearsAhead: YearsAhead
+}
+
+/** Years taken for a building of unknown age where no neighbour's is known: open, so it is wide. */
+const NOTHING_KNOWN_SPAN_YEARS = 120
+
+/**
+ * Stock and years ahead of a district's recorded buildings with one edition of the factor book.
+ *
+ * A building of unknown age gets the ages of the buildings of its use and structure in the district, else of its
+ * use, else of all: the district's own distribution stands for what is not known.
+ *
+ * @throws {ComputeError} `empty-input` without buildings, `negative-area`, `factor-missing`, `negative-age`
+ */
+export function computeDistrict(
+  buildings: readonly SurveyedBuilding[],
+  figures: readonly IntensityFigure[],
+  lifetimes: readonly LifetimeFigure[],
+  conventions: DistrictConventions,
+): DistrictComputation {
+  if (buildings.length === 0) throw new ComputeError('empty-input', { what: 'buildings' })
+  const indexByKey = new Map<string, number>()
+  const archetypes: ResolvedArchetype[] = []
+  const cells = buildings.map((building): BuildingCell => {
+    const periodId = periodOf(building)
+    const key = `${building.use}|${building.structure}|${periodId}`
+    let archetype = indexByKey.get(key)
+    if (archetype === undefined) {
+      archetype =
+        archetypes.push(
+          resolveArchetype({ use: building.use, structure: building.structure, periodId }, figures, lifetimes),
+        ) - 1
+      indexByKey.set(key, archetype)
+    }
+    return toCell(building, archetype)
+  })
+  const yearConventions: YearsAheadConventions = {
+    ...conventions,
+    unknownYears: makeUnknownYears(buildings, archetypes, conventions.surveyYear),
+  }
+  return {
+    archetypes,
+    cells,
+    stock: stockOfCells(cells, archetypes),
+    yearsAhead: yearsAheadOfCells(cells, archetypes, yearConventions),
+  }
+}
+
+/** Mean mass of one building by material [kg]. */
+export function massOfBuilding(cell: BuildingCell, archetype: ResolvedArchetype): Map<Material, number> {
+  const masses = new Map<Material, number>()
+  for (const { material, meanKgPerM2 } of archetype.factors) {
+    masses.set(material, (masses.get(material) ?? 0) + cell.floorAreaM2 * meanKgPerM2)
+  }
+  return masses
+}
+
+/** Period of a building; a range over a break of building practice is of no one period. */
+function periodOf({ yearFrom, yearTo }: SurveyedBuilding): PeriodIdOrUnknown {
+  if (yearFrom === null || yearTo === null) return UNKNOWN
+  const [first, last] = [periodOfYear(yearFrom), periodOfYear(yearTo)]
+  return first === last ? first : UNKNOWN
+}
+
+function toCell(building: SurveyedBuilding, archetype: number): BuildingCell {
+  const { grossFloorAreaM2, floorAreaCv } = building
+  if (!(grossFloorAreaM2 > 0) || !(floorAreaCv >= 0))
+    throw new ComputeError('negative-area', { buildingId: building.buildingId, grossFloorAreaM2, floorAreaCv })
+  return {
+    archetype,
+    yearFrom: building.yearFrom,
+    yearTo: building.yearTo,
+    hazardMultiplier: building.hazardMultiplier,
+    buildingCount: 1,
+    floorAreaM2: grossFloorAreaM2,
+    floorAreaSquaredM4: grossFloorAreaM2 ** 2,
+    floorAreaVarianceM4: (grossFloorAreaM2 * floorAreaCv) ** 2,
+  }
+}
+
+function makeUnknownYears(
+  buildings: readonly SurveyedBuilding[],
+  archetypes: readonly ResolvedArchetype[],
+  surveyYear: number,
+): (archetype: number) => readonly YearWeight[] {
+  const dated = buildings.filter(({ yearFrom, yearTo }) => yearFrom !== null && yearTo !== null)
+  const kept = new Map<number, readonly YearWeight[]>()
+  return (index) => {
+    const known = kept.get(index)
+    if (known) return known
+    const { use, structure } = archetypes[index]!
+    const likeness = [
+      dated.filter((building) => building.use === use && building.structure === structure),
+      dated.filter((building) => building.use === use),
+      dated,
+    ]
+    const weights = weightsOf(likeness.find((group) => group.length > 0) ?? [], surveyYear)
+    kept.set(index, weights)
+    return weights
+  }
+}
+
+function weightsOf(dated: readonly SurveyedBuilding[], surveyYear: number): readonly YearWeight[] {
+  if (dated.length === 0) {
+    return Array.from({ length: NOTHING_KNOWN_SPAN_YEARS }, (_, step) => ({
+      year: surveyYear - step,
+      weight: 1 / NOTHING_KNOWN_SPAN_YEARS,
+    }))
+  }
+  const weightByYear = new Map<number, number>()
+  for (const { yearFrom, yearTo } of dated) {
+    const count = yearTo! - yearFrom! + 1
+    for (let year = yearFrom!; year <= yearTo!; year++)
+      weightByYear.set(year, (weightByYear.get(year) ?? 0) + 1 / count / dated.length)
+  }
+  return [...weightByYear].sort(([a], [b]) => a - b).map(([year, weight]) => ({ year, weight }))
+}
