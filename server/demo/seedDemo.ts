@@ -8,6 +8,7 @@ import { insertRows } from './insertRows'
 import { layOutTown } from './layOutTown'
 import { demoId, type SeededBuilding, type Seeding } from './seeding.types'
 import { seedRounds } from './seedRounds'
+import { seedRuns } from './seedRuns'
 import { footprintM2, innerPointText, toMultiPolygonText } from './townGeometry'
 import { DEMO_ORGANISATION, DEMO_PASSWORD, DEMO_PEOPLE, DISTRICTS } from './townNames'
 
@@ -27,6 +28,7 @@ export async function seedDemo(
   } finally {
     await sequelize.close()
   }
+  await seedRuns(ownerUrl)
   return demoAccounts()
 }
 

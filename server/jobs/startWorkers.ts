@@ -1,8 +1,10 @@
 import { sendLink } from '@/server/commands/sendLink'
 import type { Context } from '@/server/context'
+import { computeRun } from './computeRun'
 
 /** Gives each job of the queue its worker. */
 export async function startWorkers(context: Context): Promise<void> {
+  await context.queue.work('compute-run', (job) => computeRun(context, job))
   await context.queue.work('send-mail', (message) => context.mailer.send(message))
   await context.queue.work('send-link', (link) => sendLink(context, link))
 }

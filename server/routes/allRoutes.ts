@@ -1,10 +1,14 @@
 import type { Router } from 'express'
 import type { Context } from '@/server/context'
 import { authRoutes } from './auth/authRoutes'
+import { factorBookRoutes } from './factorBook/factorBookRoutes'
 import { healthRoutes } from './health/healthRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
+import { photoRoutes } from './photos/photoRoutes'
+import { publicationRoutes } from './publications/publicationRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
+import { runRoutes } from './runs/runRoutes'
 import { syncRoutes } from './sync/syncRoutes'
 
 /** The routes of every resource; each knows its endpoints of the contract. */
@@ -15,4 +19,8 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   outlineRoutes,
   roundRoutes,
   syncRoutes,
+  photoRoutes,
+  factorBookRoutes,
+  runRoutes,
+  publicationRoutes,
 ]

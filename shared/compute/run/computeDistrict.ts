@@ -11,6 +11,7 @@ import { ComputeError } from '@/shared/compute/errors'
 import type { YearWeight } from '@/shared/compute/stock/stock.types'
 import { resolveArchetype, type LifetimeFigure, type ResolvedArchetype } from './resolveArchetype'
 import type { BuildingCell, YearsAheadConventions } from './run.types'
+import { makeChanceBook, type ChanceBook } from './chanceBook'
 import { stockOfCells, type StockEstimate } from './stockOfCells'
 import { yearsAheadOfCells, type YearsAhead } from './yearsAheadOfCells'
 
@@ -38,6 +39,8 @@ export interface DistrictComputation {
   readonly cells: readonly BuildingCell[]
   readonly stock: StockEstimate
   readonly yearsAhead: YearsAhead
+  /** Chances of single cells, for maps and receipts. */
+  readonly chances: ChanceBook
 }
 
 /** Years taken for a building of unknown age where no neighbour's is known: open, so it is wide. */
@@ -82,6 +85,7 @@ export function computeDistrict(
     cells,
     stock: stockOfCells(cells, archetypes),
     yearsAhead: yearsAheadOfCells(cells, archetypes, yearConventions),
+    chances: makeChanceBook(cells, archetypes, yearConventions),
   }
 }
 

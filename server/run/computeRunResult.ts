@@ -1,0 +1,75 @@
+import { computeDistrict, massOfBuilding, type DistrictComputation } from '@/shared/compute/run/computeDistrict'
+import type { LifetimeFigure } from '@/shared/compute/run/resolveArchetype'
+import type { EditionRows } from '@/shared/schemas/factorBook'
+import type { RunBuilding, RunResult, Scenario } from '@/shared/schemas/run'
+import { hazardMultiplierOf } from './hazardMultiplierOf'
+import { presentBasis } from './presentBasis'
+import { presentStock } from './presentStock'
+import { presentYearsAhead } from './presentYearsAhead'
+import type { RunInputs } from './runInputs.types'
+
+export interface ComputedRun {
+  readonly result: RunResult
+  readonly buildings: readonly RunBuilding[]
+}
+
+/** From frozen inputs and one edition to the result: pure, so equal inputs give equal bytes. */
+export function computeRunResult(
+  inputs: RunInputs,
+  edition: Pick<EditionRows, 'intensities' | 'lifetimes'>,
+): ComputedRun {
+  const { scenario, surveyYear, sheets } = inputs
+  const buildings = sheets.map((sheet) => ({ ...sheet, hazardMultiplier: hazardMultiplierOf(sheet, scenario) }))
+  const district = computeDistrict(buildings, edition.intensities, withOverrides(edition.lifetimes, scenario), {
+    surveyYear,
+    horizonYears: scenario.horizonYears,
+    yearOffset: scenario.yearOffset,
+  })
+  return {
+    result: {
+      basis: presentBasis(inputs, district),
+      stock: presentStock(inputs, district, edition.intensities),
+      yearsAhead: presentYearsAhead(inputs, district),
+    },
+    buildings: presentBuildings(inputs, district),
+  }
+}
+
+/** A scenario's lifetimes stand before those of the edition: an override of a use is the most specific row. */
+function withOverrides(lifetimes: readonly LifetimeFigure[], { lifetimeOverrides }: Scenario): LifetimeFigure[] {
+  return lifetimes.map((row) => {
+    if (row.component !== 'building') return row
+    const override =
+      lifetimeOverrides.find(({ use }) => use === row.use) ?? lifetimeOverrides.find(({ use }) => use === 'all')
+    return override ? { ...row, model: override.model, meanYears: override.meanYears, sdYears: override.sdYears } : row
+  })
+}
+
+function presentBuildings(
+  { sheets, scenario }: RunInputs,
+  { cells, archetypes, chances }: DistrictComputation,
+): RunBuilding[] {
+  const last = scenario.horizonYears - 1
+  return sheets.map((sheet, index): RunBuilding => {
+    const cell = cells[index]!
+    const masses = massOfBuilding(cell, archetypes[cell.archetype]!)
+    const soFar = chances.comingDown(cell).givenSoFar
+    return {
+      buildingId: sheet.buildingId,
+      outlineId: sheet.outlineId,
+      blockId: sheet.blockId,
+      label: sheet.label,
+      use: sheet.use,
+      structure: sheet.structure,
+      yearFrom: sheet.yearFrom,
+      yearTo: sheet.yearTo,
+      footprintM2: sheet.footprintM2,
+      grossFloorAreaM2: sheet.grossFloorAreaM2,
+      floorAreaCv: sheet.floorAreaCv,
+      massKg: [...masses.values()].reduce((total, mass) => total + mass, 0),
+      massByMaterialKg: Object.fromEntries(masses),
+      chanceTenYears: soFar[Math.min(9, last)]!,
+      chanceThirtyYears: soFar[Math.min(29, last)]!,
+    }
+  })
+}

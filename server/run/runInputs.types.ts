@@ -1,0 +1,45 @@
+import type { StructureOrUnknown, UseOrUnknown } from '@/shared/compute/factors/vocabulary'
+import type { Scenario } from '@/shared/schemas/run'
+
+/** Version of the computation; it changes when equal inputs would give other results. */
+export const ENGINE_VERSION = '1.0.0'
+
+/** A checked sheet as it stood when the run was started. */
+export interface RunSheet {
+  readonly buildingId: string
+  readonly outlineId: string | null
+  readonly blockId: string | null
+  readonly label: string
+  readonly use: UseOrUnknown
+  readonly structure: StructureOrUnknown
+  readonly yearFrom: number | null
+  readonly yearTo: number | null
+  readonly footprintM2: number
+  readonly grossFloorAreaM2: number
+  readonly floorAreaCv: number
+  readonly isStoreysKnown: boolean
+  readonly condition: string
+  readonly vacancy: string
+  readonly isProtected: boolean
+}
+
+export interface FrameCounts {
+  readonly frameCount: number
+  readonly inaccessibleCount: number
+  readonly notABuildingCount: number
+  readonly clearedCount: number
+  readonly outstandingCount: number
+  readonly frameFootprintM2: number
+}
+
+/** All a run depends on, frozen at its start. */
+export interface RunInputs {
+  readonly engineVersion: string
+  readonly surveyYear: number
+  readonly seed: number
+  readonly scenario: Scenario
+  readonly editionId: string
+  readonly editionSha256: string
+  readonly frame: FrameCounts
+  readonly sheets: readonly RunSheet[]
+}
