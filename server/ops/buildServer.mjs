@@ -4,7 +4,7 @@ import { fingerprint, isFresh, writeStamp } from './fingerprint.mjs'
 import { places, ROOT } from './places.mjs'
 
 const INPUTS = ['server', 'shared', 'assets/factors', 'package.json', 'package-lock.json', 'tsconfig.json']
-const ENTRIES = ['server/main.ts', 'server/cli.ts']
+const ENTRIES = ['server/main.ts', 'server/cli.ts', 'server/jobs/photoWorker.mjs']
 
 /**
  * Bundles the server and its command line into `.build/server`, packages left where they are.

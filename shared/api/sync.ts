@@ -90,7 +90,7 @@ export const declareUpload = defineEndpoint({
   params: nothing,
   query: nothing,
   body: z.object({ photoId: id, sha256: z.string().regex(/^[0-9a-f]{64}$/), bytes: z.number().int().positive() }),
-  response: z.object({ state: z.enum(['stored', 'partial']), offset: z.number().int() }),
+  response: z.object({ state: z.enum(['stored', 'partial', 'refused']), offset: z.number().int() }),
 })
 
 /**

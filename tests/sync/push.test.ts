@@ -232,7 +232,7 @@ describe('a phone that was restored from a copy', () => {
   it('P4 keeps the session when the answer of renewing was lost, and takes no device of somebody else', async () => {
     const { surveyor, planner } = town
     const deviceId = randomUUID()
-    const renew = (bearer: object, id: string) =>
+    const renew = (bearer: { Authorization: string }, id: string) =>
       testApp.http.post('/api/v1/sync/device').set(bearer).send({ deviceId: id, name: 'Test phone' })
 
     const first = await renew(surveyor.bearer, deviceId)
