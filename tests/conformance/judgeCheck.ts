@@ -25,11 +25,19 @@ export function judgeCheck(
   const { id, method, expected, tolerance } = check
   try {
     const got = computeCheck(check, others, register)
-    return { id, method, disagreements: compareFigures(got, expected, tolerance) }
+    const readings = hasAlternatives(got) ? got.alternatives : [got]
+    const compared = readings.map((reading) => compareFigures(reading, expected, tolerance))
+    const disagreements = compared.reduce((best, other) => (other.length < best.length ? other : best))
+    return { id, method, disagreements }
   } catch (fault) {
     const got = fault instanceof Error ? `refused: ${fault.message}` : String(fault)
     return { id, method, disagreements: [{ key: method, got, expected: 'a figure' }] }
   }
+}
+
+/** Figures whose names may be read in more than one way: the reading that agrees as a whole is meant. */
+function hasAlternatives(got: unknown): got is { readonly alternatives: readonly unknown[] } {
+  return typeof got === 'object' && got !== null && 'alternatives' in got && Array.isArray(got.alternatives)
 }
 
 function computeCheck(check: ConformanceCheck, others: readonly ConformanceCheck[], register: MethodRegister): unknown {
