@@ -7,6 +7,7 @@ import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
 import { publicationRoutes } from './publications/publicationRoutes'
+import { reviewRoutes } from './review/reviewRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
 import { runRoutes } from './runs/runRoutes'
 import { syncRoutes } from './sync/syncRoutes'
@@ -20,6 +21,7 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   roundRoutes,
   syncRoutes,
   photoRoutes,
+  reviewRoutes,
   factorBookRoutes,
   runRoutes,
   publicationRoutes,
