@@ -8,7 +8,13 @@ export interface ObservedLife {
   readonly isDemolished: boolean
 }
 
-/** Refuses lives that cannot have been observed. */
+/**
+ * Refuses lives that cannot have been observed.
+ *
+ * @throws {ComputeError} `empty-input`, `interval-reversed`
+ * @example
+ * requireLives([{ entryAgeYears: 0, exitAgeYears: 9, isDemolished: true }]) // => undefined
+ */
 export function requireLives(lives: readonly ObservedLife[]): void {
   if (lives.length === 0) throw new ComputeError('empty-input', { what: 'observed lives' })
   for (const { entryAgeYears, exitAgeYears } of lives) {

@@ -29,7 +29,14 @@ export interface ChanceBook {
   renewals(cell: BuildingCell, component: Component): ThreeWays
 }
 
-/** Computes the chances of a cell once for each life, range of years and multiplier, and remembers them. */
+/**
+ * Computes the chances of a cell once for each life, range of years and multiplier, and remembers them.
+ *
+ * @throws {ComputeError} `interval-reversed`, `negative-age` for a construction year after the survey
+ * @see Kalbfleisch, J. D. & Prentice, R. L. (2002). The Statistical Analysis of Failure Time Data, 2nd ed., §1.2 and §4.1.
+ * @example
+ * makeChanceBook([], [], { surveyYear: 2026, horizonYears: 10, yearOffset: 0.5, unknownYears: () => [] }).comingDown !== undefined // => true
+ */
 export function makeChanceBook(
   cells: readonly BuildingCell[],
   archetypes: readonly Archetype[],

@@ -52,6 +52,9 @@ const NOTHING_KNOWN_SPAN_YEARS = 120
  * A building of unknown age gets the ages of the buildings of its use and structure in the district, else of its
  * use, else of all: the district's own distribution stands for what is not known.
  *
+ * @example
+ * computeDistrict([{ buildingId: 'a', use: 'office', structure: 'steel-frame', yearFrom: 1976, yearTo: 1976, grossFloorAreaM2: 10, floorAreaCv: 0, hazardMultiplier: 1 }], [], [{ rowId: 'l', use: 'all', structure: 'all', component: 'building', model: 'exponential', meanYears: 50, sdYears: 50, sharedCv: 0 }], { surveyYear: 2026, horizonYears: 1, yearOffset: 0.5 }).yearsAhead.expectedFloorAreaM2[0] // => 0.198013266932447
+ *
  * @throws {ComputeError} `empty-input` without buildings, `negative-area`, `factor-missing`, `negative-age`
  */
 export function computeDistrict(
@@ -89,7 +92,12 @@ export function computeDistrict(
   }
 }
 
-/** Mean mass of one building by material [kg]. */
+/**
+ * Mean mass of one building by material [kg].
+ *
+ * @example
+ * massOfBuilding({ archetype: 0, yearFrom: 1900, yearTo: 1900, hazardMultiplier: 1, buildingCount: 1, floorAreaM2: 100, floorAreaSquaredM4: 10000, floorAreaVarianceM4: 0 }, { factors: [{ material: 'glass', component: 'openings', factorId: 'g', meanKgPerM2: 3, sharedCv: 0, betweenBuildingsCv: 0 }] }).get('glass') // => 300
+ */
 export function massOfBuilding(cell: BuildingCell, archetype: ResolvedArchetype): Map<Material, number> {
   const masses = new Map<Material, number>()
   for (const { material, meanKgPerM2 } of archetype.factors) {

@@ -30,6 +30,9 @@ export interface ResolvedArchetype extends Archetype {
  * Gathers what a run needs of a kind of building from one edition of the factor book: its factors, split by
  * component where the book splits them, the life of the building, and the lives of its components.
  *
+ * @example
+ * resolveArchetype({ use: 'office', structure: 'unknown', periodId: 'unknown' }, [], [{ rowId: 'l', use: 'all', structure: 'all', component: 'building', model: 'fixed', meanYears: 60, sdYears: 0, sharedCv: 0.2 }]).life.longer // => { model: 'fixed', lifetimeYears: 72 }
+ *
  * @throws {ComputeError} `factor-missing` when the book has no lifetime for the building, `mixed-area-bases`
  */
 export function resolveArchetype(

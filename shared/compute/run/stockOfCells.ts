@@ -23,6 +23,9 @@ export interface AreaSums {
  * with f over the factors. Materials have factors of their own; the error of an area is common to all
  * materials of a building, which is why the total is not the sum of the material variances.
  *
+ * @example
+ * stockOfCells([], []).total.meanKg // => 0
+ *
  * @see Goodman, L. A. (1960). On the exact variance of products. Journal of the American Statistical Association 55, 708–713.
  */
 export function stockOfCells(cells: readonly BuildingCell[], archetypes: readonly Archetype[]): StockEstimate {
@@ -37,7 +40,12 @@ export function stockOfCells(cells: readonly BuildingCell[], archetypes: readonl
   return { total: estimate(sums, archetypes, () => true), byMaterial }
 }
 
-/** ΣA, ΣA² and Var ΣA by archetype. */
+/**
+ * ΣA, ΣA² and Var ΣA by archetype.
+ *
+ * @example
+ * addUpByArchetype([], 1) // => [{ floorAreaM2: 0, floorAreaSquaredM4: 0, floorAreaVarianceM4: 0 }]
+ */
 export function addUpByArchetype(cells: readonly BuildingCell[], archetypeCount: number): AreaSums[] {
   const sums = Array.from({ length: archetypeCount }, () => ({
     floorAreaM2: 0,
@@ -86,7 +94,12 @@ function estimate(
   return { meanKg, varianceByCauseKg2: { measurement, factor, lifetime: 0, chance: 0 } }
 }
 
-/** Whole variance [kg²]. */
+/**
+ * Whole variance [kg²].
+ *
+ * @example
+ * totalVariance({ measurement: 1, factor: 2, lifetime: 3, chance: 4 }) // => 10
+ */
 export function totalVariance({ measurement, factor, lifetime, chance }: VarianceByCause): number {
   return measurement + factor + lifetime + chance
 }

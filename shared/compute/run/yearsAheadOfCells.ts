@@ -53,6 +53,9 @@ interface FlowSums {
  * Refurbishment of a component in year k is A·F·q_k·u_n with q_k the share standing after the year and u_n the
  * renewal density n years after construction; a building that comes down is not renewed in that year.
  *
+ * @example
+ * yearsAheadOfCells([], [], { surveyYear: 2026, horizonYears: 2, yearOffset: 0.5, unknownYears: () => [] }).expectedBuildings // => [0, 0]
+ *
  * @see Müller, D. B. (2006). Stock dynamics for forecasting material flows. Ecological Economics 59, 142–156.
  */
 export function yearsAheadOfCells(
