@@ -34,6 +34,8 @@ interface FlowSums {
   readonly floorAreaIfLonger: Float64Array
   /** Σ Var A · p² [m⁴/yr²]. */
   readonly measured: Float64Array
+  /** Σ E[A²] · p² [m⁴/yr²]. */
+  readonly squared: Float64Array
   /** Σ E[A²] · p(1 − p) [m⁴/yr²]. */
   readonly drawn: Float64Array
 }
@@ -44,7 +46,7 @@ interface FlowSums {
  * Each building is one draw: it comes down in one year or none. With p its chance in a year,
  *
  *     E = Σ A F̄ p,
- *     Var = Σ Var A·(F̄p)² + Σ_f Var F (Σ A p)² + Σ E[A²] E[F²] p(1 − p) + Σ_L ((E⁺ − E⁻)/2)²
+ *     Var = Σ p²(Var A·F̄² + E[A²]·F̄²cv_b²) + Σ_f Var F (Σ A p)² + Σ E[A²] E[F²] p(1 − p) + Σ_L ((E⁺ − E⁻)/2)²
  *
  * over measurement, factors f (shared), chance, and lifetimes L (shared; E⁺ and E⁻ with a mean life one
  * standard error longer and shorter). Buildings are reduced to archetypes first, so the cost does not
@@ -109,6 +111,7 @@ function emptySums(length: number, lifeId: string): FlowSums {
     floorAreaIfShorter: zeros(),
     floorAreaIfLonger: zeros(),
     measured: zeros(),
+    squared: zeros(),
     drawn: zeros(),
   }
 }
@@ -128,6 +131,7 @@ function addCell(
     sums.floorAreaIfShorter[k]! += floorAreaM2 * shorter[k]!
     sums.floorAreaIfLonger[k]! += floorAreaM2 * longer[k]!
     sums.measured[k]! += floorAreaVarianceM4 * p * p
+    sums.squared[k]! += expectedSquare * p * p
     // a renewal density may pass 1 a year for very short lives; chance has no variance to add then
     sums.drawn[k]! += p < 1 ? expectedSquare * p * (1 - p) : 0
   }
@@ -237,7 +241,7 @@ function addGroup(
   if (!swing) swingByLife.set(sums.lifeId, (swing = new Float64Array(length)))
   for (let k = 0; k < length; k++) {
     flow.meanKg[k]! += intensity * sums.floorArea[k]!
-    measurement[k]! += intensity ** 2 * sums.measured[k]!
+    measurement[k]! += intensity ** 2 * sums.measured[k]! + betweenVariance * sums.squared[k]!
     chance[k]! += (intensity ** 2 + intensityVariance + betweenVariance) * sums.drawn[k]!
     swing[k]! += intensity * (sums.floorAreaIfLonger[k]! - sums.floorAreaIfShorter[k]!)
   }
