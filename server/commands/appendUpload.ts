@@ -42,7 +42,7 @@ export async function appendUpload(
 
 /** One chunk of a photo at a time. Not a row lock: handing in must never wait for a disk. */
 async function lockUpload(scope: Scope, photoId: string): Promise<void> {
-  await scope.execute(`SET LOCAL lock_timeout = '4s'`)
+  await scope.execute(`SET LOCAL lock_timeout = '2s'`)
   await scope.select('SELECT pg_advisory_xact_lock(hashtextextended($name, 0))', {
     name: `${scope.organisationId}/${photoId}`,
   })

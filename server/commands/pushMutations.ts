@@ -73,7 +73,7 @@ async function judgeBatch(scope: Scope, arrival: Arrival): Promise<Pick<Answer, 
 
 /** One batch of a device at a time; a lock that is not got in time gives up, so that nobody waits for ever. */
 async function lockDevice(scope: Scope, deviceId: string): Promise<number> {
-  await scope.execute(`SET LOCAL lock_timeout = '4s'`)
+  await scope.execute(`SET LOCAL lock_timeout = '2s'`)
   const [device] = await scope.select<{ last_seq: string; revoked_at: Date | null }>(
     `SELECT last_seq, revoked_at FROM device
      WHERE organisation_id = $organisationId AND device_id = $deviceId AND person_id = $personId FOR NO KEY UPDATE`,
