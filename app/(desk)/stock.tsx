@@ -1,0 +1,5 @@
+import { StockScreen } from '@/components/stock/StockScreen'
+
+export default function StockRoute() {
+  return <StockScreen />
+}
