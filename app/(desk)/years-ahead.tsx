@@ -1,0 +1,5 @@
+import { YearsAheadScreen } from '@/components/flows/YearsAheadScreen'
+
+export default function YearsAheadRoute() {
+  return <YearsAheadScreen />
+}
