@@ -1,0 +1,5 @@
+import { DistrictScreen } from '@/components/district/DistrictScreen'
+
+export default function DistrictRoute() {
+  return <DistrictScreen />
+}
