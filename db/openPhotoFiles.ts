@@ -1,24 +1,25 @@
-import { Directory, File, Paths } from 'expo-file-system'
+import * as FileSystem from 'expo-file-system/legacy'
 import type { PhotoFiles } from './photoFiles.types'
 
 /** Photos of one person as files of the app. */
 export async function openPhotoFiles(name: string): Promise<PhotoFiles> {
-  const folder = new Directory(Paths.document, `${name}-photos`)
-  if (!folder.exists) folder.create()
-  const fileOf = (sha256: string) => new File(folder, sha256)
+  const folder = `${FileSystem.documentDirectory ?? ''}${name}-photos/`
+  await FileSystem.makeDirectoryAsync(folder, { intermediates: true })
   return {
-    async write(sha256, bytes) {
-      const file = fileOf(sha256)
-      if (!file.exists) file.create()
-      file.write(bytes)
-    },
+    write: (sha256, bytes) =>
+      FileSystem.writeAsStringAsync(folder + sha256, toBase64(bytes), { encoding: FileSystem.EncodingType.Base64 }),
     async read(sha256) {
-      const file = fileOf(sha256)
-      return file.exists ? file.bytes() : null
+      const found = await FileSystem.getInfoAsync(folder + sha256)
+      if (!found.exists) return null
+      const text = await FileSystem.readAsStringAsync(folder + sha256, { encoding: FileSystem.EncodingType.Base64 })
+      return Uint8Array.from(atob(text), (character) => character.charCodeAt(0))
     },
-    async remove(sha256) {
-      const file = fileOf(sha256)
-      if (file.exists) file.delete()
-    },
+    remove: (sha256) => FileSystem.deleteAsync(folder + sha256, { idempotent: true }),
   }
+}
+
+function toBase64(bytes: Uint8Array): string {
+  let text = ''
+  for (const byte of bytes) text += String.fromCharCode(byte)
+  return btoa(text)
 }

@@ -1,0 +1,31 @@
+import type { Mutation } from '@/shared/schemas/sync'
+import type { Statements } from './driver.types'
+import { takeSeq } from './metaTable'
+
+type WithoutNumber<Kind> = Kind extends Mutation ? Omit<Kind, 'id' | 'seq' | 'at' | 'elapsedMs'> : never
+
+/** A mutation before it has its identities. */
+export type NewMutation = WithoutNumber<Mutation>
+
+export interface Stamp {
+  readonly newId: () => string
+  readonly now: () => Date
+  /** Milliseconds since the app started. */
+  readonly elapsedMs: () => number
+}
+
+/** Writes a mutation into the bag, with its own id and the next number of the device. */
+export async function appendMutation(
+  inside: Statements,
+  change: NewMutation,
+  buildingId: string,
+  stamp: Stamp,
+): Promise<void> {
+  const seq = await takeSeq(inside)
+  const at = stamp.now().toISOString()
+  const mutation = { ...change, id: stamp.newId(), seq, at, elapsedMs: Math.round(stamp.elapsedMs()) }
+  await inside.run(
+    'INSERT INTO outbox (mutation_id, seq, type, entity_id, building_id, payload, put_in_at) VALUES (?, ?, ?, ?, ?, ?, ?)',
+    [mutation.id, seq, mutation.type, mutation.entity, buildingId, JSON.stringify(mutation), at],
+  )
+}

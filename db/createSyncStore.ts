@@ -1,0 +1,148 @@
+import type { MutationOutcome } from '@/shared/schemas/sync'
+import type { Problem } from '@/shared/schemas/problem'
+import { syncDigest } from '@/shared/sync/syncDigest'
+import { applyPage } from './applyPage'
+import type { Driver, Statements } from './driver.types'
+import { readMeta, removeMeta, writeMeta } from './metaTable'
+import type { PhotoFiles } from './photoFiles.types'
+import { readColumn, type OutboxRow, type PhotoRow } from './rows'
+import type { SyncStore, WaitingMutation } from './syncStore.types'
+
+export interface SyncStoreParts {
+  readonly driver: Driver
+  readonly photoFiles: PhotoFiles
+  readonly now: () => Date
+  readonly changed: () => void
+  readonly subscribe: (listener: () => void) => () => void
+}
+
+/** The device's database as handing in uses it. */
+export function createSyncStore({ driver, photoFiles, now, changed, subscribe }: SyncStoreParts): SyncStore {
+  const write = async (work: (inside: Statements) => Promise<void>): Promise<void> => {
+    await driver.transaction(work)
+    changed()
+  }
+  return {
+    subscribe,
+    nextBatch: (mostCount, mostBytes) => nextBatch(driver, mostCount, mostBytes),
+    countWaiting: () => countWaiting(driver),
+    settle: (outcomes) => write((inside) => settle(inside, outcomes, now())),
+    setApart: (mutationId, problem) => write((inside) => setApart(inside, mutationId, problem, now())),
+    async hasSeq(seq) {
+      return (await driver.all('SELECT seq FROM outbox WHERE seq = ? AND status IS NULL', [seq])).length > 0
+    },
+    nextSeq: async () => Number((await readMeta(driver, 'nextSeq')) ?? '1'),
+    renumber: (deviceId) => write((inside) => renumber(inside, deviceId)),
+    readCursor: () => readMeta(driver, 'cursor'),
+    applyPage: (page) => write((inside) => applyPage(inside, page)),
+    dropConfirmed: (ackSeq, at) => write((inside) => dropConfirmed(inside, ackSeq, at)),
+    async baseDigest() {
+      return syncDigest(await driver.all<{ id: string; change: number }>('SELECT id, change_no AS change FROM base'))
+    },
+    clearBase: () =>
+      write(async (inside) => {
+        await inside.run('DELETE FROM base')
+        await inside.run('DELETE FROM gone_sheet')
+        await removeMeta(inside, 'cursor')
+      }),
+    async nextPhotos(most) {
+      const rows = await driver.all<PhotoRow>(
+        `SELECT * FROM photo WHERE place = 'kept-here' AND is_removed = 0 AND NOT EXISTS (
+           SELECT 1 FROM outbox WHERE entity_id = photo_id AND status IS NULL)
+         ORDER BY photo_id LIMIT ?`,
+        [most],
+      )
+      return rows.map(({ meta }) => readColumn.photoMeta(meta))
+    },
+    readPhotoBytes: (sha256) => photoFiles.read(sha256),
+    markPhoto: (photoId, place, refusal) =>
+      write((inside) =>
+        inside.run('UPDATE photo SET place = ?, refusal = ? WHERE photo_id = ?', [place, refusal, photoId]),
+      ),
+    keepEdition: (edition) => write((inside) => writeMeta(inside, 'edition', JSON.stringify(edition))),
+  }
+}
+
+async function nextBatch(inside: Statements, mostCount: number, mostBytes: number): Promise<WaitingMutation[]> {
+  const rows = await inside.all<OutboxRow>('SELECT * FROM outbox WHERE status IS NULL ORDER BY seq LIMIT ?', [
+    mostCount,
+  ])
+  const batch: WaitingMutation[] = []
+  let bytes = 0
+  for (const row of rows) {
+    const size = new TextEncoder().encode(row.payload).length
+    if (batch.length > 0 && bytes + size > mostBytes) break
+    bytes += size
+    batch.push({ mutationId: row.mutation_id, seq: row.seq, mutation: JSON.parse(row.payload), bytes: size })
+  }
+  return batch
+}
+
+async function countWaiting(inside: Statements) {
+  const [row] = await inside.all<{ unanswered: number; unconfirmed: number; photos: number }>(
+    `SELECT (SELECT count(*) FROM outbox WHERE status IS NULL) AS unanswered,
+            (SELECT count(*) FROM outbox WHERE status IS NOT NULL) AS unconfirmed,
+            (SELECT count(*) FROM photo WHERE place = 'kept-here' AND is_removed = 0) AS photos`,
+  )
+  return row ?? { unanswered: 0, unconfirmed: 0, photos: 0 }
+}
+
+async function settle(inside: Statements, outcomes: readonly MutationOutcome[], now: Date): Promise<void> {
+  for (const { id, status, change, problem } of outcomes) {
+    if (status === 'applied' || status === 'replay') {
+      await inside.run('UPDATE outbox SET status = ?, change_no = ? WHERE mutation_id = ?', [
+        status,
+        change ?? null,
+        id,
+      ])
+    } else {
+      await setApart(inside, id, problem ?? unexplained(status), now)
+    }
+  }
+}
+
+function unexplained(status: string): Problem {
+  return { type: 'about:blank', title: status, status: 422, code: status, detail: status, faults: [] }
+}
+
+/** Out of the bag, into quarantine, with all of its content. */
+async function setApart(inside: Statements, mutationId: string, problem: Problem, now: Date): Promise<void> {
+  await inside.run(
+    `INSERT INTO quarantine (mutation_id, type, building_id, payload, problem, set_apart_at)
+     SELECT mutation_id, type, building_id, payload, ?, ? FROM outbox WHERE mutation_id = ?
+     ON CONFLICT (mutation_id) DO UPDATE SET problem = excluded.problem`,
+    [JSON.stringify(problem), now.toISOString(), mutationId],
+  )
+  await inside.run(
+    `UPDATE photo SET place = 'refused', refusal = ?
+     WHERE photo_id = (SELECT entity_id FROM outbox WHERE mutation_id = ? AND type = 'photo')`,
+    [problem.detail, mutationId],
+  )
+  await inside.run('DELETE FROM outbox WHERE mutation_id = ?', [mutationId])
+}
+
+/** Same work, same ids, numbers from 1: what the new device id hands in first (P4). */
+async function renumber(inside: Statements, deviceId: string): Promise<void> {
+  const rows = await inside.all<OutboxRow>('SELECT * FROM outbox ORDER BY seq')
+  // upwards first, so that no number meets one that is still there
+  await inside.run('UPDATE outbox SET seq = seq + 1000000000')
+  for (const [index, row] of rows.entries()) {
+    const payload = { ...(JSON.parse(row.payload) as Record<string, unknown>), seq: index + 1 }
+    await inside.run('UPDATE outbox SET seq = ?, payload = ?, status = NULL, change_no = NULL WHERE mutation_id = ?', [
+      index + 1,
+      JSON.stringify(payload),
+      row.mutation_id,
+    ])
+  }
+  await writeMeta(inside, 'nextSeq', String(rows.length + 1))
+  await writeMeta(inside, 'deviceId', deviceId)
+}
+
+async function dropConfirmed(inside: Statements, ackSeq: number, at: string): Promise<void> {
+  await inside.run('DELETE FROM outbox WHERE seq <= ? AND status IS NOT NULL', [ackSeq])
+  await inside.run(
+    'DELETE FROM photo WHERE is_removed = 1 AND photo_id NOT IN (SELECT entity_id FROM outbox WHERE type = ?)',
+    ['photo'],
+  )
+  await writeMeta(inside, 'lastHandedInAt', at)
+}

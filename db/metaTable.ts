@@ -1,0 +1,26 @@
+import type { Statements } from './driver.types'
+
+export type MetaName = 'nextSeq' | 'cursor' | 'edition' | 'lastHandedInAt' | 'scopeEpoch' | 'deviceId'
+
+export async function readMeta(inside: Statements, name: MetaName): Promise<string | null> {
+  const [row] = await inside.all<{ value: string }>('SELECT value FROM meta WHERE name = ?', [name])
+  return row?.value ?? null
+}
+
+export async function writeMeta(inside: Statements, name: MetaName, value: string): Promise<void> {
+  await inside.run(
+    'INSERT INTO meta (name, value) VALUES (?, ?) ON CONFLICT (name) DO UPDATE SET value = excluded.value',
+    [name, value],
+  )
+}
+
+export async function removeMeta(inside: Statements, name: MetaName): Promise<void> {
+  await inside.run('DELETE FROM meta WHERE name = ?', [name])
+}
+
+/** The next number of this device, taken in the transaction that uses it; numbers have no gaps. */
+export async function takeSeq(inside: Statements): Promise<number> {
+  const seq = Number((await readMeta(inside, 'nextSeq')) ?? '1')
+  await writeMeta(inside, 'nextSeq', String(seq + 1))
+  return seq
+}

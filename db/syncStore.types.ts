@@ -1,0 +1,47 @@
+import type { EditionForDevice } from '@/shared/schemas/factorBook'
+import type { PhotoMeta } from '@/shared/schemas/sheet'
+import type { Change, MutationOutcome } from '@/shared/schemas/sync'
+import type { Problem } from '@/shared/schemas/problem'
+import type { SyncDigest } from '@/shared/sync/syncDigest'
+
+/** What handing in needs of the device's database. */
+export interface SyncStore {
+  /** The oldest mutations without an answer, verbatim, within both limits; one always comes, however large. */
+  nextBatch(mostCount: number, mostBytes: number): Promise<readonly WaitingMutation[]>
+  /** Mutations without an answer, or sent and not seen back. */
+  countWaiting(): Promise<{ readonly unanswered: number; readonly unconfirmed: number; readonly photos: number }>
+  /** Writes the server's answers down; refused ones move to quarantine with their content. */
+  settle(outcomes: readonly MutationOutcome[]): Promise<void>
+  /** Sets one mutation apart that cannot be sent at all. */
+  setApart(mutationId: string, problem: Problem): Promise<void>
+  hasSeq(seq: number): Promise<boolean>
+  nextSeq(): Promise<number>
+  /** Numbers what waits from 1, with the same ids; nothing of it counts as answered any more. */
+  renumber(deviceId: string): Promise<void>
+  readCursor(): Promise<string | null>
+  /** Stores a page, its cursor and its scope together. */
+  applyPage(page: PulledPage): Promise<void>
+  /** After the last page: drops from the bag what the snapshot holds and the server answered. */
+  dropConfirmed(ackSeq: number, at: string): Promise<void>
+  baseDigest(): Promise<SyncDigest>
+  /** Throws the pulled rows away; bag, drafts, quarantine and photos stay. */
+  clearBase(): Promise<void>
+  nextPhotos(most: number): Promise<readonly PhotoMeta[]>
+  readPhotoBytes(sha256: string): Promise<Uint8Array | null>
+  markPhoto(photoId: string, place: 'sent' | 'refused', refusal: string | null): Promise<void>
+  keepEdition(edition: EditionForDevice): Promise<void>
+  subscribe(listener: () => void): () => void
+}
+
+export interface WaitingMutation {
+  readonly mutationId: string
+  readonly seq: number
+  readonly mutation: unknown
+  readonly bytes: number
+}
+
+export interface PulledPage {
+  readonly changes: readonly Change[]
+  readonly cursor: string
+  readonly beatIds: readonly string[]
+}
