@@ -1,5 +1,5 @@
 import type { DistrictComputation } from '@/shared/compute/run/computeDistrict'
-import { massBand } from '@/shared/compute/run/massBand'
+import { flowBand } from '@/shared/compute/run/flowBand'
 import type { FlowByMaterial, FlowEstimate } from '@/shared/compute/run/yearsAheadOfCells'
 import type { BandSeries, RunResult } from '@/shared/schemas/run'
 import type { RunInputs } from './runInputs.types'
@@ -23,10 +23,8 @@ function presentFlow({ total, byMaterial }: FlowByMaterial) {
   }
 }
 
-function toSeries({ meanKg, varianceByCauseKg2: cause }: FlowEstimate): BandSeries {
-  const bands = Array.from(meanKg, (mean, k) =>
-    massBand(mean, cause.measurement[k]! + cause.factor[k]! + cause.lifetime[k]! + cause.chance[k]!),
-  )
+function toSeries(flow: FlowEstimate): BandSeries {
+  const bands = Array.from(flow.meanKg, (_, year) => flowBand(flow, year))
   return {
     meanKg: bands.map((band) => band.meanKg),
     p10Kg: bands.map((band) => band.p10Kg),

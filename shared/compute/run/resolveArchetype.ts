@@ -31,7 +31,7 @@ export interface ResolvedArchetype extends Archetype {
  * component where the book splits them, the life of the building, and the lives of its components.
  *
  * @example
- * resolveArchetype({ use: 'office', structure: 'unknown', periodId: 'unknown' }, [], [{ rowId: 'l', use: 'all', structure: 'all', component: 'building', model: 'fixed', meanYears: 60, sdYears: 0, sharedCv: 0.2 }]).life.longer // => { model: 'fixed', lifetimeYears: 72 }
+ * resolveArchetype({ use: 'office', structure: 'unknown', periodId: 'unknown' }, [], [{ rowId: 'l', use: 'all', structure: 'all', component: 'building', model: 'fixed', meanYears: 60, sdYears: 0, sharedCv: 0 }]).life.longer // => { model: 'fixed', lifetimeYears: 60 }
  *
  * @throws {ComputeError} `factor-missing` when the book has no lifetime for the building, `mixed-area-bases`
  */
@@ -102,10 +102,12 @@ function mostSpecific(
 
 function lifetimeUse({ rowId, model, meanYears, sdYears, sharedCv }: LifetimeFigure): LifetimeUse {
   const lifetime = lifetimeFromMeanSd(model, meanYears, sdYears)
+  // a life is positive: its error is lognormal, as that of a factor
+  const logSd = Math.sqrt(Math.log1p(sharedCv ** 2))
   return {
     lifetimeId: rowId,
     lifetime,
-    shorter: scaleLifetime(lifetime, 1 - sharedCv),
-    longer: scaleLifetime(lifetime, 1 + sharedCv),
+    shorter: scaleLifetime(lifetime, Math.exp(-logSd)),
+    longer: scaleLifetime(lifetime, Math.exp(logSd)),
   }
 }

@@ -1,10 +1,14 @@
 import type { Component, Material } from '@/shared/compute/factors/vocabulary'
 import { makeChanceBook, type ChanceBook } from './chanceBook'
+import { lifetimeDoubt } from './lifetimeDoubt'
 import type { Archetype, BuildingCell, VarianceByCause, YearsAheadConventions } from './run.types'
 
 /** Mean [kg/yr] and variance by cause [kg²/yr²], entry k for survey year + 1 + k. */
 export interface FlowEstimate {
+  /** Under the lives as given. */
   readonly meanKg: Float64Array
+  /** What the doubt of the lives adds to the mean, ½·f″σ²: a band stands around the mean with this added [kg/yr]. */
+  readonly lifetimeShiftKg: Float64Array
   readonly varianceByCauseKg2: Readonly<Record<keyof VarianceByCause, Float64Array>>
 }
 
@@ -46,10 +50,10 @@ interface FlowSums {
  * Each building is one draw: it comes down in one year or none. With p its chance in a year,
  *
  *     E = Σ A F̄ p,
- *     Var = Σ p²(Var A·F̄² + E[A²]·F̄²cv_b²) + Σ_f Var F (Σ A p)² + Σ E[A²] E[F²] p(1 − p) + Σ_L ((E⁺ − E⁻)/2)²
+ *     Var = Σ p²(Var A·F̄² + E[A²]·F̄²cv_b²) + Σ_f Var F (Σ A p)² + Σ E[A²] E[F²] p(1 − p) + Σ_L Var_L
  *
- * over measurement, factors f (shared), chance, and lifetimes L (shared; E⁺ and E⁻ with a mean life one
- * standard error longer and shorter). Buildings are reduced to archetypes first, so the cost does not
+ * over measurement, factors f (shared), chance, and lifetimes L (shared, see
+ * {@link lifetimeDoubt}). Buildings are reduced to archetypes first, so the cost does not
  * grow with the number of buildings times materials.
  *
  * Refurbishment of a component in year k is A·F·q_k·u_n with q_k the share standing after the year and u_n the
@@ -179,6 +183,7 @@ function estimateFlow(
 ): FlowEstimate {
   const flow = {
     meanKg: new Float64Array(length),
+    lifetimeShiftKg: new Float64Array(length),
     varianceByCauseKg2: {
       measurement: new Float64Array(length),
       factor: new Float64Array(length),
@@ -187,14 +192,27 @@ function estimateFlow(
     },
   }
   const areaByFactor = new Map<string, { sdKgPerM2: number; floorArea: Float64Array }>()
-  const swingByLife = new Map<string, Float64Array>()
+  const swingByLife = new Map<string, Swing>()
   archetypes.forEach((archetype, index) => {
     for (const group of groupBySums(archetype, index, sumsOf, counts)) addGroup(flow, areaByFactor, swingByLife, group)
   })
   for (const { sdKgPerM2, floorArea } of areaByFactor.values())
     addSquares(flow.varianceByCauseKg2.factor, floorArea, sdKgPerM2)
-  for (const swing of swingByLife.values()) addSquares(flow.varianceByCauseKg2.lifetime, swing, 0.5)
+  for (const swing of swingByLife.values()) {
+    for (let k = 0; k < length; k++) {
+      const { shiftKg, varianceKg2 } = lifetimeDoubt(swing.given[k]!, swing.shorter[k]!, swing.longer[k]!)
+      flow.lifetimeShiftKg[k]! += shiftKg
+      flow.varianceByCauseKg2.lifetime[k]! += varianceKg2
+    }
+  }
   return flow
+}
+
+/** A flow of one life under the life as given and one standard error shorter and longer [kg/yr]. */
+interface Swing {
+  readonly given: Float64Array
+  readonly shorter: Float64Array
+  readonly longer: Float64Array
 }
 
 interface Group {
@@ -231,19 +249,29 @@ function groupBySums(
 function addGroup(
   flow: FlowEstimate,
   areaByFactor: Map<string, { sdKgPerM2: number; floorArea: Float64Array }>,
-  swingByLife: Map<string, Float64Array>,
+  swingByLife: Map<string, Swing>,
   group: Group,
 ): void {
   const { sums, intensity, intensityVariance, betweenVariance } = group
   const length = flow.meanKg.length
   const { measurement, chance } = flow.varianceByCauseKg2
   let swing = swingByLife.get(sums.lifeId)
-  if (!swing) swingByLife.set(sums.lifeId, (swing = new Float64Array(length)))
+  if (!swing)
+    swingByLife.set(
+      sums.lifeId,
+      (swing = {
+        given: new Float64Array(length),
+        shorter: new Float64Array(length),
+        longer: new Float64Array(length),
+      }),
+    )
   for (let k = 0; k < length; k++) {
     flow.meanKg[k]! += intensity * sums.floorArea[k]!
     measurement[k]! += intensity ** 2 * sums.measured[k]! + betweenVariance * sums.squared[k]!
     chance[k]! += (intensity ** 2 + intensityVariance + betweenVariance) * sums.drawn[k]!
-    swing[k]! += intensity * (sums.floorAreaIfLonger[k]! - sums.floorAreaIfShorter[k]!)
+    swing.given[k]! += intensity * sums.floorArea[k]!
+    swing.shorter[k]! += intensity * sums.floorAreaIfShorter[k]!
+    swing.longer[k]! += intensity * sums.floorAreaIfLonger[k]!
   }
   for (const { factorId, sdKgPerM2 } of group.factors) {
     let shared = areaByFactor.get(factorId)
