@@ -1,0 +1,5 @@
+import { PublishScreen } from '@/components/publish/PublishScreen'
+
+export default function PublishRoute() {
+  return <PublishScreen />
+}
