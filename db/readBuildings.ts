@@ -58,7 +58,7 @@ interface Parts {
 
 function storedBuilding({ row, sheet, bag, draft, photoCount }: Parts): StoredBuilding {
   const confirmed = sheet === undefined ? null : readColumn.sheet(sheet)
-  const drafted: SheetAnswers = draft === undefined ? {} : readColumn.draft(draft)
+  const drafted: SheetAnswers = readColumn.draft(draft ?? '{}')
   const state: SheetState | null = confirmed?.review.state ?? null
   const waiting = bag.filter(({ status }) => status === null).length
   return {

@@ -27,6 +27,8 @@ export interface SessionStore {
   subscribe(listener: () => void): () => void
   signIn(email: string, password: string, deviceName: string): Promise<Account>
   adopt(session: Session): Account
+  /** The session goes on with another access token, for another device id. */
+  adoptToken(accessToken: string): void
   /** Ends the session on the server if it is reached; what is kept on the device stays. */
   signOut(): Promise<void>
 }
@@ -117,6 +119,9 @@ export function createSessionStore({
       return () => listeners.delete(listener)
     },
     adopt,
+    adoptToken(accessToken) {
+      token = accessToken
+    },
     async signIn(email, password, deviceName) {
       const attempt = () =>
         api.call(signIn, { body: { email, password, device: { deviceId: deviceId(), name: deviceName } } })

@@ -1,0 +1,163 @@
+import {
+  createContext,
+  useCallback,
+  useContext,
+  useEffect,
+  useRef,
+  useState,
+  useSyncExternalStore,
+  type ReactNode,
+} from 'react'
+import { OpenElsewhereError } from '@/db/driver.types'
+import type { FieldStore } from '@/db/fieldStore.types'
+import { openFieldDatabase } from '@/db/openFieldDatabase'
+import { createHandIn, type RunningHandIn } from '@/sync/createHandIn'
+import type { HandIn, HandInState } from '@/sync/handIn.types'
+import { useAccount, useSessionStore } from './SessionProvider'
+
+interface Field {
+  readonly store: FieldStore
+  readonly handIn: HandIn
+}
+
+const FieldContext = createContext<Field | null>(null)
+
+export type FieldOpening =
+  | { readonly kind: 'opening' }
+  | { readonly kind: 'open'; readonly field: Field }
+  | { readonly kind: 'elsewhere' }
+  | { readonly kind: 'failed'; readonly reason: string }
+
+interface FieldProviderProps {
+  readonly deviceName: string
+  /** Shown instead of the children until the database is open. */
+  readonly fallback: (opening: FieldOpening, useHere: () => void) => ReactNode
+  readonly children: ReactNode
+}
+
+/** Opens the device's database of who is signed in and hands in from it, for everything below. */
+export function FieldProvider({ deviceName, fallback, children }: FieldProviderProps) {
+  const { opening, useHere } = useFieldOpening(deviceName)
+  if (opening.kind !== 'open') return fallback(opening, useHere)
+  return <FieldContext value={opening.field}>{children}</FieldContext>
+}
+
+function useFieldOpening(deviceName: string) {
+  const { organisationId, personId } = useAccount()
+  const session = useSessionStore()
+  const [opening, setOpening] = useState<FieldOpening>({ kind: 'opening' })
+  const [attempt, setAttempt] = useState(0)
+  useEffect(() => {
+    let isLeft = false
+    let leave = () => {}
+    const open = async () => {
+      const onTaken = () => {
+        leave()
+        setOpening({ kind: 'elsewhere' })
+      }
+      const database = await openFieldDatabase({ organisationId, personId }, { takeOver: attempt > 0, onTaken })
+      const running = createHandIn({
+        store: database.sync,
+        api: session.api,
+        deviceId: session.deviceId,
+        renewDeviceId: () => session.renewDeviceId(),
+        adoptToken: (token) => session.adoptToken(token),
+        deviceName,
+        now: () => new Date(),
+        random: Math.random,
+        later: (work, delayMs) => {
+          const timer = setTimeout(work, delayMs)
+          return () => clearTimeout(timer)
+        },
+      })
+      const stopWaking = wake(running)
+      leave = () => {
+        stopWaking()
+        running.stop()
+      }
+      if (isLeft) {
+        leave()
+        await database.close()
+        return
+      }
+      const stop = leave
+      leave = () => {
+        stop()
+        void database.close().catch(() => undefined)
+      }
+      setOpening({ kind: 'open', field: { store: database.field, handIn: running } })
+      void running.handIn()
+    }
+    open().catch((error: unknown) => {
+      if (isLeft) return
+      if (error instanceof OpenElsewhereError) setOpening({ kind: 'elsewhere' })
+      else setOpening({ kind: 'failed', reason: error instanceof Error ? error.message : String(error) })
+    })
+    return () => {
+      isLeft = true
+      leave()
+    }
+  }, [organisationId, personId, session, deviceName, attempt])
+  const useHere = useCallback(() => {
+    setOpening({ kind: 'opening' })
+    setAttempt((before) => before + 1)
+  }, [])
+  return { opening, useHere }
+}
+
+/** Hands in when the network may be back and when the app comes to the front. */
+function wake(running: RunningHandIn): () => void {
+  if (typeof window === 'undefined' || !('addEventListener' in window)) return () => {}
+  const go = () => void running.handIn()
+  const onVisible = () => {
+    if (document.visibilityState === 'visible') go()
+  }
+  window.addEventListener('online', go)
+  document.addEventListener('visibilitychange', onVisible)
+  return () => {
+    window.removeEventListener('online', go)
+    document.removeEventListener('visibilitychange', onVisible)
+  }
+}
+
+export function useField(): Field {
+  const field = useContext(FieldContext)
+  if (!field) throw new Error('no FieldProvider above')
+  return field
+}
+
+export function useHandInState(): HandInState {
+  const { handIn } = useField()
+  return useSyncExternalStore(handIn.subscribe, handIn.getState, handIn.getState)
+}
+
+/**
+ * What a read of the device's database says, read anew after every change of it.
+ *
+ * @param read keep it with `useCallback`
+ * @returns undefined until the first answer
+ */
+export function useStored<Result>(read: (store: FieldStore) => Promise<Result>): Result | undefined {
+  const { store } = useField()
+  const [found, setFound] = useState<{ result: Result } | undefined>(undefined)
+  const latest = useRef(0)
+  useEffect(() => {
+    let isLeft = false
+    const readNow = () => {
+      const turn = ++latest.current
+      read(store).then(
+        (result) => {
+          if (!isLeft && turn === latest.current) setFound({ result })
+        },
+        () => undefined,
+      )
+    }
+    readNow()
+    const unsubscribe = store.subscribe(readNow)
+    return () => {
+      isLeft = true
+      unsubscribe()
+    }
+  }, [read, store])
+  return found?.result
+}

@@ -1,0 +1,12 @@
+const FIRST_MS = 1_000
+const MOST_MS = 300_000
+
+/**
+ * How long to wait before the next try: exponential with full jitter, rand(0, min(300 s, 1 s · 2ⁿ)).
+ *
+ * @param failures tries that failed in a row, from 1
+ * @param random in [0, 1)
+ */
+export function retryDelayMs(failures: number, random: number): number {
+  return Math.round(random * Math.min(MOST_MS, FIRST_MS * 2 ** failures))
+}
