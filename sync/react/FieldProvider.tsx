@@ -3,6 +3,7 @@ import {
   useCallback,
   useContext,
   useEffect,
+  useMemo,
   useRef,
   useState,
   useSyncExternalStore,
@@ -20,29 +21,38 @@ interface Field {
   readonly handIn: HandIn
 }
 
-const FieldContext = createContext<Field | null>(null)
-
 export type FieldOpening =
   | { readonly kind: 'opening' }
   | { readonly kind: 'open'; readonly field: Field }
   | { readonly kind: 'elsewhere' }
   | { readonly kind: 'failed'; readonly reason: string }
 
+interface OpeningContext {
+  readonly opening: FieldOpening
+  /** Takes the database over from the other tab. */
+  readonly useHere: () => void
+}
+
+const FieldContext = createContext<OpeningContext | null>(null)
+
 interface FieldProviderProps {
   readonly deviceName: string
-  /** Shown instead of the children until the database is open. */
-  readonly fallback: (opening: FieldOpening, useHere: () => void) => ReactNode
   readonly children: ReactNode
 }
 
-/** Opens the device's database of who is signed in and hands in from it, for everything below. */
-export function FieldProvider({ deviceName, fallback, children }: FieldProviderProps) {
-  const { opening, useHere } = useFieldOpening(deviceName)
-  if (opening.kind !== 'open') return fallback(opening, useHere)
-  return <FieldContext value={opening.field}>{children}</FieldContext>
+/** Opens the device's database of who is signed in and hands in from it. */
+export function FieldProvider({ deviceName, children }: FieldProviderProps) {
+  const { opening, takeOver } = useOpening(deviceName)
+  const context = useMemo(() => ({ opening, useHere: takeOver }), [opening, takeOver])
+  return <FieldContext value={context}>{children}</FieldContext>
 }
 
-function useFieldOpening(deviceName: string) {
+/** How far the database is; null for people who do not walk. */
+export function useFieldOpening(): OpeningContext | null {
+  return useContext(FieldContext)
+}
+
+function useOpening(deviceName: string) {
   const { organisationId, personId } = useAccount()
   const session = useSessionStore()
   const [opening, setOpening] = useState<FieldOpening>({ kind: 'opening' })
@@ -98,11 +108,11 @@ function useFieldOpening(deviceName: string) {
       leave()
     }
   }, [organisationId, personId, session, deviceName, attempt])
-  const useHere = useCallback(() => {
+  const takeOver = useCallback(() => {
     setOpening({ kind: 'opening' })
     setAttempt((before) => before + 1)
   }, [])
-  return { opening, useHere }
+  return { opening, takeOver }
 }
 
 /** Hands in when the network may be back and when the app comes to the front. */
@@ -121,9 +131,9 @@ function wake(running: RunningHandIn): () => void {
 }
 
 export function useField(): Field {
-  const field = useContext(FieldContext)
-  if (!field) throw new Error('no FieldProvider above')
-  return field
+  const context = useContext(FieldContext)
+  if (context?.opening.kind !== 'open') throw new Error('the database of the field is not open here')
+  return context.opening.field
 }
 
 export function useHandInState(): HandInState {
