@@ -1,5 +1,15 @@
 import { Slot } from 'expo-router'
+import { AppProviders } from '@/components/session/AppProviders'
+import { UpdateNotice } from '@/components/session/UpdateNotice'
+import { useAppFonts } from '@/components/ui/theme/useAppFonts'
 
 export default function RootLayout() {
-  return <Slot />
+  const hasFonts = useAppFonts()
+  if (!hasFonts) return null
+  return (
+    <AppProviders>
+      <UpdateNotice />
+      <Slot />
+    </AppProviders>
+  )
 }

@@ -1,9 +1,8 @@
-import { Text, View } from 'react-native'
+import { Redirect, type Href } from 'expo-router'
+import { homeOf } from '@/components/session/homeOf'
+import { useSession } from '@/sync/react/SessionProvider'
 
-export default function StartScreen() {
-  return (
-    <View role="main">
-      <Text role="heading">Tallystone</Text>
-    </View>
-  )
+export default function StartRoute() {
+  const { account } = useSession()
+  return <Redirect href={(account ? homeOf(account.roles) : '/sign-in') as Href} />
 }

@@ -1,0 +1,5 @@
+import { JoinScreen } from '@/components/session/JoinScreen'
+
+export default function JoinRoute() {
+  return <JoinScreen />
+}

@@ -1,0 +1,5 @@
+import { ResetScreen } from '@/components/session/ResetScreen'
+
+export default function ResetRoute() {
+  return <ResetScreen />
+}

@@ -1,0 +1,39 @@
+import { Redirect, usePathname, useRouter, type Href } from 'expo-router'
+import type { ReactNode } from 'react'
+import { AppFrame } from '@/components/ui/AppFrame'
+import { useMessages } from '@/components/ui/MessagesProvider'
+import type { Role } from '@/shared/schemas/person'
+import { useSession } from '@/sync/react/SessionProvider'
+import { DemoStrip } from './DemoStrip'
+import { FrameFoot } from './FrameFoot'
+import { homeOf } from './homeOf'
+import { sideEntries } from './sideEntries'
+
+interface SideFrameProps {
+  readonly role: Exclude<Role, 'surveyor'>
+  readonly children: ReactNode
+}
+
+const SIDE = { planner: 'nav.desk', contractor: 'nav.yard', steward: 'nav.steward' } as const
+
+/** Frame of desk, yard and steward: lets nobody in without the role. */
+export function SideFrame({ role, children }: SideFrameProps) {
+  const { account } = useSession()
+  const { t } = useMessages()
+  const path = usePathname()
+  const router = useRouter()
+  if (!account) return <Redirect href="/sign-in" />
+  if (!account.roles.includes(role)) return <Redirect href={homeOf(account.roles) as Href} />
+  return (
+    <AppFrame
+      entries={sideEntries(account.roles, t)}
+      currentPath={path}
+      onNavigate={(href) => router.navigate(href as Href)}
+      place={`${account.organisationName} · ${t(SIDE[role])}`}
+      foot={<FrameFoot />}
+      strip={account.isDemo ? <DemoStrip /> : undefined}
+    >
+      {children}
+    </AppFrame>
+  )
+}
