@@ -23,24 +23,26 @@ export function flowRows(yearsAhead: YearsAhead, kind: FlowKind, yearCount: numb
   const kinds = kind === 'both' ? (['demolition', 'refurbishment'] as const) : [kind]
   const flows = kinds.map((one) => yearsAhead[one])
   const band = flows.length === 1 ? flows[0]?.total : undefined
-  return yearsAhead.years.slice(0, yearCount).map((year, place) => {
-    const massKg: Partial<Record<Material, number>> = {}
-    for (const { byMaterial } of flows) {
-      for (const material of MATERIALS) {
-        const found = byMaterial[material]?.meanKg[place]
-        if (found !== undefined) massKg[material] = (massKg[material] ?? 0) + found
-      }
+  return yearsAhead.years.slice(0, yearCount).map((year, place) => ({
+    year,
+    totalKg: flows.reduce((sum, { total }) => sum + (total.meanKg[place] ?? 0), 0),
+    lowKg: band?.p10Kg[place] ?? null,
+    highKg: band?.p90Kg[place] ?? null,
+    massKg: massOfYear(flows, place),
+    expectedBuildings: yearsAhead.expectedBuildings[place] ?? 0,
+    expectedFloorAreaM2: yearsAhead.expectedFloorAreaM2[place] ?? 0,
+  }))
+}
+
+function massOfYear(flows: readonly YearsAhead['demolition'][], place: number): Partial<Record<Material, number>> {
+  const massKg: Partial<Record<Material, number>> = {}
+  for (const { byMaterial } of flows) {
+    for (const material of MATERIALS) {
+      const found = byMaterial[material]?.meanKg[place]
+      if (found !== undefined) massKg[material] = (massKg[material] ?? 0) + found
     }
-    return {
-      year,
-      totalKg: flows.reduce((sum, { total }) => sum + (total.meanKg[place] ?? 0), 0),
-      lowKg: band?.p10Kg[place] ?? null,
-      highKg: band?.p90Kg[place] ?? null,
-      massKg,
-      expectedBuildings: yearsAhead.expectedBuildings[place] ?? 0,
-      expectedFloorAreaM2: yearsAhead.expectedFloorAreaM2[place] ?? 0,
-    }
-  })
+  }
+  return massKg
 }
 
 /** Materials that flow in these rows, heaviest over all years first. */
