@@ -1,3 +1,4 @@
+import { buildingLabel } from './buildingLabel'
 import type { Statements } from './driver.types'
 import type { BagContents, BagEntry, Place } from './fieldStore.types'
 import { readMeta } from './metaTable'
@@ -5,15 +6,6 @@ import { readColumn, type OutboxRow, type PhotoRow, type QuarantineRow } from '.
 
 interface Named {
   readonly fields: string | null
-}
-
-/** What a person calls a building: street and number, else its reference. */
-export function buildingLabel(outline: {
-  readonly street: string | null
-  readonly houseNumber: string | null
-  readonly reference: string
-}): string {
-  return outline.street ? [outline.street, outline.houseNumber].filter(Boolean).join(' ') : outline.reference
 }
 
 /** Everything that is not yet confirmed, what was refused, and how much is begun. */
