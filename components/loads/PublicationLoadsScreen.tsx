@@ -21,7 +21,7 @@ interface PublicationLoadsScreenProps {
 
 /** One publication: its loads counted in my vehicles, or why it was withdrawn. */
 export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoadsScreenProps) {
-  const { t, locale } = useMessages()
+  const { t } = useMessages()
   const api = useApi()
   const [fleet, setFleet] = useState<Fleet>({ containerM3: 30, payloadT: 13 })
   const publications = useQuery(yardPublicationsQuery(api))
@@ -33,6 +33,7 @@ export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoa
   })
   const publication = listed ?? loads.data?.publication
   const shown = isWithdrawn ? undefined : loads.data
+  const isWaiting = !shown && !loads.error && !isWithdrawn
   return (
     <Screen
       title={publication?.title ?? t('loads.title')}
@@ -41,15 +42,7 @@ export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoa
       width="full"
       aside={shown ? <LoadsBasis loads={shown} /> : undefined}
     >
-      {listed && listed.withdrawnAt !== null ? (
-        <Notice
-          whatHappened={t('loads.withdrawnTitle', {
-            date: formatDate(listed.withdrawnAt, locale),
-            reason: listed.withdrawalReason ?? '',
-          })}
-          whatToDo={t('loads.withdrawnDo')}
-        />
-      ) : null}
+      {isWithdrawn ? <Withdrawn publication={listed} /> : null}
       {loads.error && !isWithdrawn ? <ProblemNotice error={loads.error} onRetry={() => void loads.refetch()} /> : null}
       {shown ? (
         <>
@@ -57,9 +50,22 @@ export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoa
           <LoadsReport loads={shown} />
         </>
       ) : null}
-      {!shown && !loads.error && !isWithdrawn ? <AppText soft>{t('common.loading')}</AppText> : null}
+      {isWaiting ? <AppText soft>{t('common.loading')}</AppText> : null}
       {publication ? <PublicationTitleBlock publication={publication} /> : null}
     </Screen>
+  )
+}
+
+function Withdrawn({ publication }: { readonly publication: Publication }) {
+  const { t, locale } = useMessages()
+  return (
+    <Notice
+      whatHappened={t('loads.withdrawnTitle', {
+        date: formatDate(publication.withdrawnAt ?? '', locale),
+        reason: publication.withdrawalReason ?? '',
+      })}
+      whatToDo={t('loads.withdrawnDo')}
+    />
   )
 }
 
