@@ -22,38 +22,53 @@ interface PublicationLoadsScreenProps {
 /** One publication: its loads counted in my vehicles, or why it was withdrawn. */
 export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoadsScreenProps) {
   const { t } = useMessages()
-  const api = useApi()
-  const [fleet, setFleet] = useState<Fleet>({ containerM3: 30, payloadT: 13 })
-  const publications = useQuery(yardPublicationsQuery(api))
+  const publications = useQuery(yardPublicationsQuery(useApi()))
   const listed = publications.data?.find((publication) => publication.publicationId === publicationId)
-  const isWithdrawn = listed !== undefined && listed.withdrawnAt !== null
-  const loads = useQuery({
-    ...loadsAheadQuery(api, publicationId, fleet),
-    enabled: !publications.isPending && !isWithdrawn,
-  })
-  const publication = listed ?? loads.data?.publication
-  const shown = isWithdrawn ? undefined : loads.data
-  const isWaiting = !shown && !loads.error && !isWithdrawn
+  if (publications.isPending) {
+    return (
+      <Screen title={t('loads.title')} onBack={onBack}>
+        <AppText soft>{t('common.loading')}</AppText>
+      </Screen>
+    )
+  }
+  if (listed && listed.withdrawnAt !== null) {
+    return (
+      <Screen title={listed.title} subtitle={placeOf(listed)} onBack={onBack}>
+        <Withdrawn publication={listed} />
+        <PublicationTitleBlock publication={listed} />
+      </Screen>
+    )
+  }
+  return <OpenPublication publicationId={publicationId} onBack={onBack} />
+}
+
+function OpenPublication({ publicationId, onBack }: PublicationLoadsScreenProps) {
+  const { t } = useMessages()
+  const [fleet, setFleet] = useState<Fleet>({ containerM3: 30, payloadT: 13 })
+  const { data: loads, error, isFetching, refetch } = useQuery(loadsAheadQuery(useApi(), publicationId, fleet))
   return (
     <Screen
-      title={publication?.title ?? t('loads.title')}
-      subtitle={publication ? `${publication.districtName} · ${publication.roundName}` : undefined}
+      title={loads?.publication.title ?? t('loads.title')}
+      subtitle={loads ? placeOf(loads.publication) : undefined}
       onBack={onBack}
       width="full"
-      aside={shown ? <LoadsBasis loads={shown} /> : undefined}
+      aside={loads ? <LoadsBasis loads={loads} /> : undefined}
     >
-      {isWithdrawn ? <Withdrawn publication={listed} /> : null}
-      {loads.error && !isWithdrawn ? <ProblemNotice error={loads.error} onRetry={() => void loads.refetch()} /> : null}
-      {shown ? (
+      {error ? <ProblemNotice error={error} onRetry={() => void refetch()} /> : null}
+      {loads ? (
         <>
-          <FleetForm fleet={fleet} isCounting={loads.isFetching} onApply={setFleet} />
-          <LoadsReport loads={shown} />
+          <FleetForm fleet={fleet} isCounting={isFetching} onApply={setFleet} />
+          <LoadsReport loads={loads} />
+          <PublicationTitleBlock publication={loads.publication} />
         </>
       ) : null}
-      {isWaiting ? <AppText soft>{t('common.loading')}</AppText> : null}
-      {publication ? <PublicationTitleBlock publication={publication} /> : null}
+      {!loads && !error ? <AppText soft>{t('common.loading')}</AppText> : null}
     </Screen>
   )
+}
+
+function placeOf({ districtName, roundName }: Publication): string {
+  return `${districtName} · ${roundName}`
 }
 
 function Withdrawn({ publication }: { readonly publication: Publication }) {
