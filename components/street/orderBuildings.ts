@@ -31,7 +31,7 @@ function distanceTo({ building }: StoredBuilding, from: Place): number {
   const corners = ring.slice(1)
   const longitude = corners.reduce((sum, [x]) => sum + x, 0) / corners.length
   const latitude = corners.reduce((sum, [, y]) => sum + y, 0) / corners.length
-  return geodesicDistance([from.longitude, from.latitude], [longitude, latitude])
+  return geodesicDistance([from.longitude, from.latitude], [longitude, latitude]).distanceM
 }
 
 /** Whether a building's street, number or reference holds the words. */

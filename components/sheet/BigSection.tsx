@@ -1,0 +1,133 @@
+import { StyleSheet, View } from 'react-native'
+import { AppText } from '@/components/ui/AppText'
+import { CheckBox } from '@/components/ui/CheckBox'
+import { Choice } from '@/components/ui/Choice'
+import { KnownByPicker } from '@/components/ui/KnownByPicker'
+import { useMessages } from '@/components/ui/MessagesProvider'
+import { NumberField } from '@/components/ui/NumberField'
+import { Panel } from '@/components/ui/Panel'
+import { SPACE } from '@/components/ui/theme/tokens'
+import { deriveSheet, STOREYS_IF_UNKNOWN } from '@/shared/schemas/deriveSheet'
+import { formatArea, formatDecimal, formatShare } from '@/shared/format'
+import type { SectionProps } from './form.types'
+
+const GROUPS = ['storeys', 'footprint', 'attic', 'basement'] as const
+const SHARES = { none: 0, half: 0.5, whole: 1, unknown: null } as const
+type ShareName = keyof typeof SHARES
+const SHARE_NAMES = ['none', 'half', 'whole', 'unknown'] as const
+
+/** Storeys, footprint, attic and basement, and the gross floor area that follows. */
+export function BigSection(props: SectionProps) {
+  const { answers, offered, faults, answer } = props
+  const { t, locale } = useMessages()
+  const { storeys, footprint } = answers
+  const done = GROUPS.filter((group) => answers[group] !== undefined).length
+  const isOffered = offered.has('storeys') || offered.has('footprint')
+  const note = t('sheet.answered', { done, total: GROUPS.length })
+  return (
+    <Panel title={t('sheet.sections.big')} note={isOffered ? `${note} · ${t('sheet.fromRegister')}` : note}>
+      <NumberField
+        label={t('sheet.storeys')}
+        hint={t('sheet.storeysHint')}
+        value={storeys?.aboveGround ?? null}
+        error={faults.storeys}
+        onChange={(aboveGround) =>
+          answer(
+            'storeys',
+            aboveGround === null ? { aboveGround } : { aboveGround, knownBy: storeys?.knownBy ?? 'seen' },
+          )
+        }
+        aside={
+          storeys && storeys.aboveGround !== null ? (
+            <KnownByPicker
+              of={t('sheet.storeys')}
+              value={storeys.knownBy ?? null}
+              onChange={(knownBy) => answer('storeys', { ...storeys, knownBy })}
+            />
+          ) : undefined
+        }
+      />
+      <CheckBox
+        label={t('sheet.storeysUnknown')}
+        checked={storeys?.aboveGround === null}
+        onChange={(isUnknown) =>
+          answer('storeys', {
+            aboveGround: isUnknown ? null : 1,
+            ...(isUnknown ? {} : { knownBy: 'guessed' as const }),
+          })
+        }
+      />
+      <NumberField
+        label={t('sheet.footprint')}
+        hint={t('sheet.footprintHint')}
+        unit="m²"
+        value={footprint ? Math.round(footprint.footprintM2 * 10) / 10 : null}
+        error={faults.footprint}
+        onChange={(footprintM2) =>
+          footprintM2 ? answer('footprint', { footprintM2, knownBy: 'measured' }) : undefined
+        }
+        aside={
+          footprint ? (
+            <KnownByPicker
+              of={t('sheet.footprint')}
+              value={footprint.knownBy}
+              onChange={(knownBy) => answer('footprint', { ...footprint, knownBy })}
+            />
+          ) : undefined
+        }
+      />
+      {(['attic', 'basement'] as const).map((group) => (
+        <Choice<ShareName>
+          key={group}
+          label={t(`sheet.${group}`)}
+          value={shareName(answers[group])}
+          error={faults[group]}
+          onChange={(name) =>
+            answer(group, { floorShare: SHARES[name], ...(name === 'unknown' ? {} : { knownBy: 'seen' as const }) })
+          }
+          options={SHARE_NAMES.map((name) => ({ value: name, label: t(`sheet.share.${name}`) }))}
+        />
+      ))}
+      <FloorArea {...props} locale={locale} />
+    </Panel>
+  )
+}
+
+function shareName(value: SectionProps['answers']['attic']): ShareName | null {
+  if (!value) return null
+  if (value.floorShare === null) return 'unknown'
+  if (value.floorShare === 0) return 'none'
+  return value.floorShare <= 0.75 ? 'half' : 'whole'
+}
+
+function FloorArea({ answers, locale }: SectionProps & { readonly locale: string }) {
+  const { t } = useMessages()
+  const { grossFloorAreaM2, floorAreaCv, footprintM2 } = deriveSheet(answers)
+  if (grossFloorAreaM2 === null || footprintM2 === null) return <AppText soft>{t('sheet.floorAreaMissing')}</AppText>
+  const storeys = answers.storeys?.aboveGround ?? null
+  const words = t(storeys === null ? 'sheet.floorAreaAssumed' : 'sheet.floorAreaWords', {
+    footprint: formatArea(footprintM2, locale),
+    storeys: formatDecimal(storeys ?? STOREYS_IF_UNKNOWN, locale, Number.isInteger(storeys ?? 1) ? 0 : 1),
+  })
+  return (
+    <View style={styles.row}>
+      <View style={styles.words}>
+        <AppText weight="semibold">{t('sheet.floorArea')}</AppText>
+        <AppText soft>{words}</AppText>
+      </View>
+      <View>
+        <AppText kind="lead" weight="bold" align="right">
+          {formatArea(grossFloorAreaM2, locale)}
+        </AppText>
+        <AppText soft align="right">
+          {t('sheet.floorAreaError', { share: formatShare(1.28 * (floorAreaCv ?? 0), locale) })}
+        </AppText>
+      </View>
+    </View>
+  )
+}
+
+const styles = StyleSheet.create({
+  row: { flexDirection: 'row', gap: SPACE.medium, paddingTop: SPACE.small },
+  words: { flex: 1 },
+})

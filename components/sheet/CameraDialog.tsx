@@ -1,0 +1,58 @@
+import { CameraView, useCameraPermissions } from 'expo-camera'
+import { useEffect, useRef, useState } from 'react'
+import { StyleSheet, View } from 'react-native'
+import { AppText } from '@/components/ui/AppText'
+import { Button } from '@/components/ui/Button'
+import { Dialog } from '@/components/ui/Dialog'
+import { useMessages } from '@/components/ui/MessagesProvider'
+
+interface CameraDialogProps {
+  readonly isOpen: boolean
+  readonly onClose: () => void
+  readonly onPicture: (picture: Blob) => void
+}
+
+/** The camera over the sheet, with one button. */
+export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) {
+  const { t } = useMessages()
+  const camera = useRef<CameraView>(null)
+  const [permission, askPermission] = useCameraPermissions()
+  const [isReady, setIsReady] = useState(false)
+  const isDenied = permission?.granted === false && !permission.canAskAgain
+  useEffect(() => {
+    if (isOpen && permission?.granted === false && permission.canAskAgain) void askPermission()
+  }, [isOpen, permission, askPermission])
+  const shoot = async () => {
+    const picture = await camera.current?.takePictureAsync({ quality: 0.9, imageType: 'jpg' })
+    if (picture) onPicture(blobOf(picture.uri))
+  }
+  return (
+    <Dialog
+      title={t('sheet.photoTake')}
+      isOpen={isOpen}
+      onClose={onClose}
+      actions={
+        <Button icon="camera" grow label={t('sheet.shutter')} disabled={!isReady} onPress={() => void shoot()} />
+      }
+    >
+      {isDenied ? <AppText tone="attention">{t('sheet.cameraDenied')}</AppText> : null}
+      {isOpen && permission?.granted ? (
+        <View style={styles.frame}>
+          <CameraView ref={camera} facing="back" style={styles.camera} onCameraReady={() => setIsReady(true)} />
+        </View>
+      ) : null}
+    </Dialog>
+  )
+}
+
+/** The bytes of a data URI. */
+function blobOf(uri: string): Blob {
+  const [head = '', body = ''] = uri.split(',', 2)
+  const bytes = Uint8Array.from(atob(body), (character) => character.charCodeAt(0))
+  return new Blob([bytes], { type: head.includes('png') ? 'image/png' : 'image/jpeg' })
+}
+
+const styles = StyleSheet.create({
+  frame: { height: 320, overflow: 'hidden' },
+  camera: { flex: 1 },
+})

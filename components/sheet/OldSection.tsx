@@ -1,0 +1,72 @@
+import { StyleSheet, View } from 'react-native'
+import { Choice } from '@/components/ui/Choice'
+import { KnownByPicker } from '@/components/ui/KnownByPicker'
+import { useMessages } from '@/components/ui/MessagesProvider'
+import { NumberField } from '@/components/ui/NumberField'
+import { Panel } from '@/components/ui/Panel'
+import { SPACE } from '@/components/ui/theme/tokens'
+import type { ConstructionYear } from '@/shared/schemas/sheet'
+import type { SectionProps } from './form.types'
+
+const KINDS = ['exact', 'between', 'unknown'] as const
+type Kind = (typeof KINDS)[number]
+
+/** The construction year: exact, between two years, or not known. */
+export function OldSection({ answers, offered, faults, answer }: SectionProps) {
+  const { t } = useMessages()
+  const year = answers.constructionYear
+  const setYear = (next: ConstructionYear) => answer('constructionYear', next)
+  const field = (label: string, value: number, onYear: (year: number) => void) => (
+    <View style={styles.half}>
+      <NumberField
+        label={label}
+        whole
+        grouping={false}
+        value={value > 0 ? value : null}
+        onChange={(typed) => onYear(typed ?? 0)}
+      />
+    </View>
+  )
+  return (
+    <Panel title={t('sheet.sections.old')} note={offered.has('constructionYear') ? t('sheet.fromRegister') : undefined}>
+      <Choice<Kind>
+        label={t('sheet.year')}
+        value={year?.kind ?? null}
+        error={faults.constructionYear}
+        onChange={(kind) => setYear(ofKind(kind, year))}
+        options={KINDS.map((value) => ({ value, label: t(`sheet.yearKind.${value}`) }))}
+        aside={
+          year && year.kind !== 'unknown' ? (
+            <KnownByPicker
+              of={t('sheet.year')}
+              value={year.knownBy}
+              onChange={(knownBy) => setYear({ ...year, knownBy })}
+            />
+          ) : undefined
+        }
+      />
+      <View style={styles.row}>
+        {year?.kind === 'exact'
+          ? field(t('sheet.yearExact'), year.year, (typed) => setYear({ ...year, year: typed }))
+          : null}
+        {year?.kind === 'between' ? (
+          <>
+            {field(t('sheet.yearFrom'), year.fromYear, (fromYear) => setYear({ ...year, fromYear }))}
+            {field(t('sheet.yearTo'), year.toYear, (toYear) => setYear({ ...year, toYear }))}
+          </>
+        ) : null}
+      </View>
+    </Panel>
+  )
+}
+
+/** The other kind, with the years that were typed already; 0 stands for one that is not typed yet. */
+function ofKind(kind: Kind, before: ConstructionYear | undefined): ConstructionYear {
+  if (kind === 'unknown') return { kind }
+  const knownBy = before && before.kind !== 'unknown' ? before.knownBy : 'guessed'
+  const from = before?.kind === 'exact' ? before.year : before?.kind === 'between' ? before.fromYear : 0
+  if (kind === 'exact') return { kind, year: from, knownBy }
+  return { kind, fromYear: from, toYear: before?.kind === 'between' ? before.toYear : from, knownBy }
+}
+
+const styles = StyleSheet.create({ row: { flexDirection: 'row', gap: SPACE.medium }, half: { flex: 1 } })

@@ -1,0 +1,172 @@
+import { useCallback, useEffect, useState } from 'react'
+import { Image, StyleSheet, View } from 'react-native'
+import { AppText } from '@/components/ui/AppText'
+import { Button } from '@/components/ui/Button'
+import { Choice } from '@/components/ui/Choice'
+import { FileButton } from '@/components/ui/FileButton'
+import { IconButton } from '@/components/ui/IconButton'
+import { useMessages } from '@/components/ui/MessagesProvider'
+import { Notice } from '@/components/ui/Notice'
+import { Panel } from '@/components/ui/Panel'
+import { SPACE } from '@/components/ui/theme/tokens'
+import type { FieldStore, StoredPhoto } from '@/db/fieldStore.types'
+import { newId } from '@/db/newId'
+import { PHOTO_TAGS, type PhotoMeta } from '@/shared/schemas/sheet'
+import { useField, useStored } from '@/sync/react/FieldProvider'
+import { CameraDialog } from './CameraDialog'
+import { preparePhoto } from './preparePhoto'
+
+type Tag = PhotoMeta['tag']
+const MOST_PHOTOS = 12
+
+interface PhotosSectionProps {
+  readonly sheetId: string
+  readonly isCameraOpen: boolean
+  readonly onCamera: (isOpen: boolean) => void
+}
+
+/** Up to twelve photos, each redrawn without metadata and kept at once. */
+export function PhotosSection({ sheetId, isCameraOpen, onCamera }: PhotosSectionProps) {
+  const { t } = useMessages()
+  const { store } = useField()
+  const photos = useStored(useCallback((from: FieldStore) => from.listPhotos(sheetId), [sheetId])) ?? []
+  const [tag, setTag] = useState<Tag>('street-front')
+  const [fault, setFault] = useState<string | null>(null)
+  const [isBusy, setIsBusy] = useState(false)
+  const isFull = photos.length >= MOST_PHOTOS
+
+  const take = async (files: readonly Blob[]) => {
+    setIsBusy(true)
+    setFault(null)
+    try {
+      for (const file of files.slice(0, MOST_PHOTOS - photos.length)) {
+        const { bytes, ...picture } = await preparePhoto(file)
+        const takenAt = new Date().toISOString()
+        await store.addPhoto({ photoId: newId(), sheetId, ...picture, bytes: bytes.length, tag, takenAt }, bytes)
+      }
+    } catch (error) {
+      setFault(error instanceof Error ? error.message : String(error))
+    } finally {
+      setIsBusy(false)
+    }
+  }
+  return (
+    <Panel title={t('sheet.sections.photos')} note={t('common.photos', { count: photos.length })}>
+      {photos.length === 0 ? <AppText soft>{t('sheet.photosNone')}</AppText> : null}
+      <View style={styles.photos}>
+        {photos.map((stored, index) => (
+          <Photo
+            key={stored.photo.photoId}
+            stored={stored}
+            number={index + 1}
+            onRemove={() => void store.removePhoto(stored.photo.photoId)}
+          />
+        ))}
+      </View>
+      {fault ? (
+        <Notice
+          tone="error"
+          urgent
+          whatHappened={t('sheet.photoFault', { reason: fault })}
+          whatIsSafe={t('sheet.photoFaultSafe')}
+          whatToDo={t('sheet.photoFaultToDo')}
+        />
+      ) : null}
+      {isFull ? <AppText soft>{t('sheet.photoMost')}</AppText> : null}
+      <Choice<Tag>
+        label={t('sheet.photoTag')}
+        value={tag}
+        onChange={setTag}
+        options={PHOTO_TAGS.map((value) => ({ value, label: t(`vocabulary.photoTag.${value}`) }))}
+      />
+      <View style={styles.row}>
+        <Button
+          kind="secondary"
+          icon="camera"
+          grow
+          label={t('sheet.photoTake')}
+          disabled={isFull}
+          busy={isBusy}
+          onPress={() => onCamera(true)}
+        />
+        <FileButton
+          kind="secondary"
+          grow
+          label={t('sheet.photoChoose')}
+          accept="image/*"
+          multiple
+          disabled={isFull}
+          onFiles={(files) => void take(files)}
+        />
+      </View>
+      <CameraDialog
+        isOpen={isCameraOpen}
+        onClose={() => onCamera(false)}
+        onPicture={(picture) => {
+          onCamera(false)
+          void take([picture])
+        }}
+      />
+    </Panel>
+  )
+}
+
+interface PhotoProps {
+  readonly stored: StoredPhoto
+  readonly number: number
+  readonly onRemove: () => void
+}
+
+function Photo({ stored, number, onRemove }: PhotoProps) {
+  const { t } = useMessages()
+  const uri = usePhotoUri(stored.photo.sha256)
+  const tag = t(`vocabulary.photoTag.${stored.photo.tag}`)
+  const place = stored.refusal ?? t(`bag.${stored.place}`)
+  return (
+    <View style={styles.photo}>
+      {uri ? (
+        <Image source={{ uri }} style={styles.image} accessibilityLabel={t('sheet.photoOf', { number, tag, place })} />
+      ) : null}
+      <View style={styles.row}>
+        <View style={styles.words}>
+          <AppText size="small">{tag}</AppText>
+          <AppText size="small" soft tone={stored.refusal ? 'error' : undefined}>
+            {place}
+          </AppText>
+        </View>
+        <IconButton icon="close" label={t('sheet.photoRemove', { number })} onPress={onRemove} />
+      </View>
+    </View>
+  )
+}
+
+/** Address of a kept picture for as long as it is shown. */
+function usePhotoUri(sha256: string): string | null {
+  const { store } = useField()
+  const [uri, setUri] = useState<string | null>(null)
+  useEffect(() => {
+    let made: string | null = null
+    let isLeft = false
+    store.readPhotoBytes(sha256).then(
+      (bytes) => {
+        if (!bytes || isLeft) return
+        made = URL.createObjectURL(new Blob([new Uint8Array(bytes)], { type: 'image/jpeg' }))
+        setUri(made)
+      },
+      () => undefined,
+    )
+    return () => {
+      isLeft = true
+      if (made) URL.revokeObjectURL(made)
+    }
+  }, [store, sha256])
+  return uri
+}
+
+const styles = StyleSheet.create({
+  photos: { flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.small },
+  photo: { width: 150 },
+  image: { width: 150, height: 112, resizeMode: 'cover' },
+  row: { flexDirection: 'row', alignItems: 'center', gap: SPACE.small },
+  words: { flex: 1 },
+})
