@@ -19,6 +19,8 @@ interface DistrictMapProps {
   readonly material: Material | 'all'
   readonly selectedOutlineId: string | null
   readonly onPress: (outlineId: string) => void
+  /** Fills its place when left out. */
+  readonly heightPx?: number
 }
 
 /** The outlines of a district, each painted by a figure of its building; what is not computed stays pale. */
@@ -56,6 +58,7 @@ export function DistrictMap(props: DistrictMapProps) {
       paint={paint}
       selectedIds={selectedIds}
       onPress={onPress}
+      heightPx={props.heightPx}
       fitKey={outlines.length === 0 ? 'none' : districtName}
       overlay={
         <MapLegend

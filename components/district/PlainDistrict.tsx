@@ -14,11 +14,13 @@ import type { District } from '@/shared/api/outlines'
 import { useApi } from '@/sync/react/SessionProvider'
 import { districtOutlinesQuery, districtsQuery } from './districtQueries'
 import { outlineName } from './outlineName'
+import { useMapRoom } from './useMapRoom'
 
 /** The outlines of a district before there is a run, and what leads to one. */
 export function PlainDistrict({ action }: { readonly action: ReactNode }) {
   const { t } = useMessages()
   const districts = useQuery(districtsQuery(useApi()))
+  const { fills } = useMapRoom()
   const [wantedId, setWanted] = useState<string | null>(null)
   const district = districts.data?.find(({ districtId }) => districtId === wantedId) ?? districts.data?.[0]
   if (!district) {
@@ -35,10 +37,10 @@ export function PlainDistrict({ action }: { readonly action: ReactNode }) {
       title={t('district.title')}
       subtitle={district.name}
       width="full"
-      fill
+      fill={fills}
       aside={<EmptyState title={t('district.noRun')} text={t('district.noRunText')} action={action} />}
     >
-      <View style={styles.bar}>
+      <View style={fills ? styles.bar : undefined}>
         <Select
           label={t('district.district')}
           options={(districts.data ?? []).map(({ districtId, name }) => ({ value: districtId, label: name }))}
@@ -54,6 +56,7 @@ export function PlainDistrict({ action }: { readonly action: ReactNode }) {
 function PlainMap({ district }: { readonly district: District }) {
   const { t } = useMessages()
   const { colours } = useTheme()
+  const { heightPx } = useMapRoom()
   const outlines = useQuery(districtOutlinesQuery(useApi(), district.districtId))
   const shapes = useMemo(
     () =>
@@ -71,6 +74,7 @@ function PlainMap({ district }: { readonly district: District }) {
       label={t('district.plainMapLabel', { district: district.name })}
       outlines={shapes}
       paint={paint}
+      heightPx={heightPx}
       fitKey={shapes.length === 0 ? 'none' : district.districtId}
     />
   )

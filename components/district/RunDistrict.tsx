@@ -20,6 +20,7 @@ import { DistrictControls, type DistrictView } from './DistrictControls'
 import { DistrictMap } from './DistrictMap'
 import { districtOutlinesQuery } from './districtQueries'
 import { outlineName } from './outlineName'
+import { useMapRoom } from './useMapRoom'
 
 interface RunDistrictProps {
   readonly run: RunSummary
@@ -30,6 +31,7 @@ interface RunDistrictProps {
 export function RunDistrict({ run, picker }: RunDistrictProps) {
   const { t } = useMessages()
   const api = useApi()
+  const { fills, heightPx } = useMapRoom()
   const outlines = useQuery(districtOutlinesQuery(api, run.districtId))
   const buildings = useQuery(runBuildingsQuery(api, run.runId))
   const read = useQuery(runQuery(api, run.runId))
@@ -56,7 +58,7 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
       title={t('district.title')}
       subtitle={`${run.districtName} · ${run.roundName}`}
       width="full"
-      fill
+      fill={fills}
       aside={
         <>
           <Receipt building={selected} isPressed={selectedOutlineId !== null} onClose={() => setSelected(null)} />
@@ -66,7 +68,7 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
         </>
       }
     >
-      <View style={styles.bar}>
+      <View style={fills ? styles.bar : styles.plainBar}>
         {picker}
         <DistrictControls view={view} onChange={setView} />
         {error ? <ProblemNotice error={error} onRetry={retry} /> : null}
@@ -81,9 +83,10 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
           material={view.material}
           selectedOutlineId={selectedOutlineId}
           onPress={setSelected}
+          heightPx={heightPx}
         />
       ) : (
-        <ScrollView style={styles.list} contentContainerStyle={styles.listBody}>
+        <ScrollView style={fills ? styles.list : undefined} contentContainerStyle={fills ? styles.listBody : undefined}>
           <BuildingTable
             buildings={found}
             material={view.material}
@@ -137,6 +140,7 @@ function Totals({ run, result, buildings }: TotalsProps) {
 
 const styles = StyleSheet.create({
   bar: { padding: SPACE.medium, gap: SPACE.medium },
+  plainBar: { gap: SPACE.medium },
   list: { flex: 1 },
   listBody: { padding: SPACE.medium },
 })
