@@ -1,4 +1,4 @@
-import { ImageManipulator, SaveFormat } from 'expo-image-manipulator'
+import { manipulateAsync, SaveFormat } from 'expo-image-manipulator'
 import { sha256Hex } from '@/db/exportBag'
 import type { PreparedPhoto } from './preparePhoto.types'
 
@@ -7,15 +7,10 @@ const LONGEST_PX = 2048
 /** Draws a picture anew at 2048 px at most, without anything a camera writes into it. */
 export async function preparePhoto(file: Blob): Promise<PreparedPhoto> {
   const source = await asDataUri(file)
-  const original = await ImageManipulator.manipulate(source).renderAsync()
-  const { width, height } = original
-  const resized =
-    Math.max(width, height) > LONGEST_PX
-      ? await ImageManipulator.manipulate(source)
-          .resize(width >= height ? { width: LONGEST_PX } : { height: LONGEST_PX })
-          .renderAsync()
-      : original
-  const saved = await resized.saveAsync({ base64: true, compress: 0.8, format: SaveFormat.JPEG })
+  const { width, height } = await manipulateAsync(source, [])
+  const edge = width >= height ? { width: LONGEST_PX } : { height: LONGEST_PX }
+  const actions = Math.max(width, height) > LONGEST_PX ? [{ resize: edge }] : []
+  const saved = await manipulateAsync(source, actions, { base64: true, compress: 0.8, format: SaveFormat.JPEG })
   const bytes = Uint8Array.from(atob(saved.base64 ?? ''), (character) => character.charCodeAt(0))
   return { bytes, sha256: await sha256Hex(bytes), widthPx: saved.width, heightPx: saved.height, mime: 'image/jpeg' }
 }

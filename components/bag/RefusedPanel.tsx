@@ -1,0 +1,37 @@
+import { StyleSheet, View } from 'react-native'
+import { AppText } from '@/components/ui/AppText'
+import { Button } from '@/components/ui/Button'
+import { useMessages } from '@/components/ui/MessagesProvider'
+import { Panel } from '@/components/ui/Panel'
+import { SPACE } from '@/components/ui/theme/tokens'
+import type { BagContents } from '@/db/fieldStore.types'
+
+interface RefusedPanelProps {
+  readonly quarantined: BagContents['quarantined']
+  readonly onOpenSheet: (buildingId: string) => void
+}
+
+/** What the server could not take, why, and the way to mend it. */
+export function RefusedPanel({ quarantined, onOpenSheet }: RefusedPanelProps) {
+  const { t } = useMessages()
+  if (quarantined.length === 0) return null
+  return (
+    <Panel title={t('bag.refused')} tone="error">
+      <AppText soft>{t('bag.refusedText')}</AppText>
+      {quarantined.map(({ mutationId, label, problem, buildingId }) => (
+        <View key={mutationId} style={styles.entry}>
+          <AppText weight="semibold">{label}</AppText>
+          <AppText>{problem.detail}</AppText>
+          {problem.faults.map((fault) => (
+            <AppText key={`${fault.pointer} ${fault.code}`} soft>
+              {`${fault.pointer} ${fault.detail}`}
+            </AppText>
+          ))}
+          <Button kind="quiet" label={t('bag.mend', { label })} onPress={() => onOpenSheet(buildingId)} />
+        </View>
+      ))}
+    </Panel>
+  )
+}
+
+const styles = StyleSheet.create({ entry: { paddingTop: SPACE.small, gap: SPACE.tight, alignItems: 'flex-start' } })
