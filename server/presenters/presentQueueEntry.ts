@@ -17,6 +17,7 @@ export interface QueueRow {
   answers: SheetAnswers
   state: SheetState
   revision: number
+  change_no: string
   recorded_by_name: string
   recorded_at: Date
   gross_floor_area_m2: number | null
@@ -28,7 +29,7 @@ export interface QueueRow {
 /** Columns of {@link QueueRow}, for a SELECT from {@link QUEUE_TABLES}. */
 export const QUEUE_COLUMNS = `s.sheet_id, s.outline_id, o.reference, o.street, o.house_number,
   o.footprint_m2 AS outline_footprint_m2, o.register_year, o.register_storeys, o.register_height_m, o.register_use,
-  s.answers, s.state, s.revision, recorder.name AS recorded_by_name, s.recorded_at, s.gross_floor_area_m2,
+  s.answers, s.state, s.revision, s.change_no, recorder.name AS recorded_by_name, s.recorded_at, s.gross_floor_area_m2,
   (SELECT count(*)::integer FROM photo p WHERE p.organisation_id = s.organisation_id AND p.sheet_id = s.sheet_id
     AND p.deleted_at IS NULL AND p.state <> 'refused') AS photo_count,
   (SELECT count(*)::integer FROM conflict c WHERE c.organisation_id = s.organisation_id AND c.sheet_id = s.sheet_id
@@ -50,6 +51,7 @@ export function presentQueueEntry(row: QueueRow): QueueEntry {
     label: place || (row.reference ?? ''),
     state: row.state,
     revision: row.revision,
+    change: Number(row.change_no),
     flags: sheetFlags({
       answers: row.answers,
       outlineFootprintM2: row.outline_footprint_m2,

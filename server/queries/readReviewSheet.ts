@@ -10,7 +10,6 @@ import type { PhotoEntity } from '@/shared/schemas/sync'
 
 interface SheetRow extends QueueRow, Omit<OutlineRow, 'outline_id' | 'reference'> {
   round_id: string
-  change_no: string
   question: string | null
   reviewed_by_name: string | null
   reviewed_at: Date | null
@@ -26,7 +25,7 @@ interface SheetRow extends QueueRow, Omit<OutlineRow, 'outline_id' | 'reference'
 export async function readReviewSheet(scope: Scope, sheetId: string, withDeleted = false): Promise<ReviewSheet> {
   const wanted = { organisationId: scope.organisationId, sheetId }
   const [row] = await scope.select<SheetRow>(
-    `SELECT ${OUTLINE_COLUMNS}, ${QUEUE_COLUMNS}, s.round_id, s.change_no, s.question, reviewer.name AS reviewed_by_name,
+    `SELECT ${OUTLINE_COLUMNS}, ${QUEUE_COLUMNS}, s.round_id, s.question, reviewer.name AS reviewed_by_name,
        s.reviewed_at, ${OUTLINE_GEOMETRY} AS geometry
      FROM ${QUEUE_TABLES}
      LEFT JOIN person reviewer ON reviewer.organisation_id = s.organisation_id AND reviewer.person_id = s.reviewed_by
@@ -37,7 +36,6 @@ export async function readReviewSheet(scope: Scope, sheetId: string, withDeleted
   return {
     ...presentQueueEntry(row),
     roundId: row.round_id,
-    change: Number(row.change_no),
     ...presentPlace(row),
     answers: row.answers,
     review: {

@@ -26,6 +26,8 @@ export const queueEntry = z.object({
   label: z.string(),
   state: sheetState,
   revision: z.number().int(),
+  /** Change number as it was read; accepting names it, so that nothing unseen is accepted. */
+  change: z.number().int(),
   flags: z.array(flag),
   recordedByName: z.string(),
   recordedAt: moment,
@@ -36,7 +38,6 @@ export type QueueEntry = z.infer<typeof queueEntry>
 
 export const reviewSheet = queueEntry.extend({
   roundId: id,
-  change: z.number().int(),
   outline: outline.nullable(),
   geometry: areaGeometry.nullable(),
   answers: sheetAnswers,

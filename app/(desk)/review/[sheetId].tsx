@@ -1,0 +1,5 @@
+import { SheetReviewScreen } from '@/components/review/SheetReviewScreen'
+
+export default function SheetReviewRoute() {
+  return <SheetReviewScreen />
+}

@@ -1,0 +1,5 @@
+import { ReviewScreen } from '@/components/review/ReviewScreen'
+
+export default function ReviewRoute() {
+  return <ReviewScreen />
+}

@@ -1,0 +1,5 @@
+import { RoundScreen } from '@/components/rounds/RoundScreen'
+
+export default function RoundRoute() {
+  return <RoundScreen />
+}

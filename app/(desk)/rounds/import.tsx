@@ -1,0 +1,5 @@
+import { ImportScreen } from '@/components/rounds/ImportScreen'
+
+export default function ImportRoute() {
+  return <ImportScreen />
+}

@@ -1,0 +1,5 @@
+import { RoundsScreen } from '@/components/rounds/RoundsScreen'
+
+export default function RoundsRoute() {
+  return <RoundsScreen />
+}

@@ -1,0 +1,5 @@
+import { PeopleScreen } from '@/components/people/PeopleScreen'
+
+export default function PeopleRoute() {
+  return <PeopleScreen />
+}
