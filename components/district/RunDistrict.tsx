@@ -86,7 +86,7 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
           heightPx={heightPx}
         />
       ) : (
-        <ScrollView style={fills ? styles.list : undefined} contentContainerStyle={fills ? styles.listBody : undefined}>
+        <TableRoom fills={fills}>
           <BuildingTable
             buildings={found}
             material={view.material}
@@ -94,9 +94,19 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
             onSelect={({ outlineId }) => setSelected(outlineId)}
             fileName={`run-${run.number}-buildings.csv`}
           />
-        </ScrollView>
+        </TableRoom>
       )}
     </Screen>
+  )
+}
+
+/** The table scrolls by itself beside the panels, and with the page above them. */
+function TableRoom({ fills, children }: { readonly fills: boolean; readonly children: ReactNode }) {
+  if (!fills) return children
+  return (
+    <ScrollView style={styles.list} contentContainerStyle={styles.listBody}>
+      {children}
+    </ScrollView>
   )
 }
 

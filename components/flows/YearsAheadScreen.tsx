@@ -72,7 +72,7 @@ function YearsAheadReport({ run, result }: YearsAheadReportProps) {
         </View>
         {hasRefurbishment ? null : <AppText soft>{t('yearsAhead.noRefurbishment')}</AppText>}
       </Panel>
-      <Cumulative yearsAhead={yearsAhead} yearCount={rows.length} surveyYear={run.surveyYear} />
+      <Cumulative yearsAhead={yearsAhead} yearCount={rows.length} />
       <Panel title={t('yearsAhead.perYear')} note={kind === 'both' ? undefined : t('yearsAhead.perYearNote')}>
         {kind === 'both' ? <AppText soft>{t('yearsAhead.bothNote')}</AppText> : null}
         <StackedFlows
@@ -101,11 +101,10 @@ function YearsAheadReport({ run, result }: YearsAheadReportProps) {
 interface CumulativeProps {
   readonly yearsAhead: RunResult['yearsAhead']
   readonly yearCount: number
-  readonly surveyYear: number
 }
 
 /** Demolition added up over the years, the band included: bands of single years cannot be added. */
-function Cumulative({ yearsAhead, yearCount, surveyYear }: CumulativeProps) {
+function Cumulative({ yearsAhead, yearCount }: CumulativeProps) {
   const { t, locale } = useMessages()
   const { cumulative } = yearsAhead
   const years = yearsAhead.years.slice(0, yearCount)
@@ -132,7 +131,6 @@ function Cumulative({ yearsAhead, yearCount, surveyYear }: CumulativeProps) {
       <BandChart
         title={t('yearsAhead.cumulative')}
         series={[{ key: 'all', label: t('yearsAhead.cumulativeSeries'), points }]}
-        markedYear={surveyYear}
       />
     </Panel>
   )
