@@ -72,7 +72,15 @@ function ReviewActions({ sheet, onNext, onPrevious }: ReviewActionsProps) {
       await settle()
     },
   })
-  useReviewKeys({ a: () => accept.mutate(), b: () => setAsking(true), j: onNext, k: onPrevious }, !isAsking)
+  const keys = {
+    a: () => accept.mutate(),
+    b: () => setAsking(true),
+    j: onNext,
+    k: onPrevious,
+    arrowright: onNext,
+    arrowleft: onPrevious,
+  }
+  useReviewKeys(keys, !isAsking && !accept.isPending)
   return (
     <>
       {accept.error ? <ProblemNotice error={accept.error} isSending /> : null}
@@ -91,7 +99,7 @@ function useReviewKeys(actions: Readonly<Record<string, () => void>>, isOn: bool
     if (!isOn) return
     const hear = (event: KeyboardEvent) => {
       const typedInto = event.target instanceof HTMLElement && /^(INPUT|TEXTAREA|SELECT)$/.test(event.target.tagName)
-      if (typedInto || event.ctrlKey || event.metaKey || event.altKey) return
+      if (typedInto || event.repeat || event.ctrlKey || event.metaKey || event.altKey) return
       actions[event.key.toLowerCase()]?.()
     }
     globalThis.addEventListener?.('keydown', hear)

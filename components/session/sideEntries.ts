@@ -5,9 +5,9 @@ import type { Role } from '@/shared/schemas/person'
 type Translate = Messages['t']
 
 /** Entries of every side a person has; each side has its head where there are several. */
-export function sideEntries(roles: readonly Role[], t: Translate): NavEntry[] {
+export function sideEntries(roles: readonly Role[], t: Translate, waitingCount = 0): NavEntry[] {
   const sides: readonly (readonly [Role, string, readonly NavEntry[]])[] = [
-    ['planner', t('nav.desk'), deskEntries(t)],
+    ['planner', t('nav.desk'), deskEntries(t, waitingCount)],
     ['contractor', t('nav.yard'), [{ href: '/loads-ahead', label: t('nav.loadsAhead'), icon: 'loads' }]],
     ['steward', t('nav.steward'), [{ href: '/people', label: t('nav.people'), icon: 'people' }]],
     ['surveyor', t('nav.field'), [{ href: '/today', label: t('nav.today'), icon: 'home' }]],
@@ -18,11 +18,11 @@ export function sideEntries(roles: readonly Role[], t: Translate): NavEntry[] {
   )
 }
 
-function deskEntries(t: Translate): NavEntry[] {
+function deskEntries(t: Translate, waitingCount: number): NavEntry[] {
   return [
     { href: '/district', label: t('nav.district'), icon: 'district' },
     { href: '/rounds', label: t('nav.rounds'), icon: 'rounds' },
-    { href: '/review', label: t('nav.review'), icon: 'review' },
+    { href: '/review', label: t('nav.review'), icon: 'review', badge: waitingCount },
     { href: '/stock', label: t('nav.stock'), icon: 'stock' },
     { href: '/years-ahead', label: t('nav.yearsAhead'), icon: 'years-ahead' },
     { href: '/publish', label: t('nav.publish'), icon: 'loads' },
