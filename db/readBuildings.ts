@@ -1,4 +1,4 @@
-import type { SheetAnswers, SheetState } from '@/shared/schemas/sheet'
+import type { SheetAnswers } from '@/shared/schemas/sheet'
 import type { Statements } from './driver.types'
 import { deviceSheetState } from './deviceSheetState'
 import type { StoredBuilding } from './fieldStore.types'
@@ -59,24 +59,21 @@ interface Parts {
 function storedBuilding({ row, sheet, bag, draft, photoCount }: Parts): StoredBuilding {
   const confirmed = sheet === undefined ? null : readColumn.sheet(sheet)
   const drafted: SheetAnswers = readColumn.draft(draft ?? '{}')
-  const state: SheetState | null = confirmed?.review.state ?? null
   const waiting = bag.filter(({ status }) => status === null).length
+  const state = deviceSheetState({
+    confirmed: confirmed?.review.state ?? null,
+    waiting,
+    sent: bag.length - waiting,
+    hasDraft: Object.keys(drafted).length > 0,
+  })
+  const sets = bag.map(({ payload }) => setOf(payload))
   return {
     buildingId: row.id,
     building: readColumn.building(row.fields),
-    state: deviceSheetState({
-      confirmed: state,
-      waiting,
-      sent: bag.length - waiting,
-      hasDraft: Object.keys(drafted).length > 0,
-    }),
-    question: state === 'sent-back' && bag.length === 0 ? (confirmed?.review.question ?? null) : null,
+    state,
+    question: state === 'sent-back' ? (confirmed?.review.question ?? null) : null,
     photoCount,
-    answers: standingAnswers(
-      confirmed?.answers ?? {},
-      bag.map(({ payload }) => setOf(payload)),
-      drafted,
-    ),
+    answers: standingAnswers(confirmed?.answers ?? {}, sets, drafted),
   }
 }
 

@@ -1,4 +1,5 @@
 import { pushMutations } from '@/shared/api/sync'
+import type { Problem } from '@/shared/schemas/problem'
 import { PUSH_LIMIT, SYNC_SCHEMA } from '@/shared/schemas/sync'
 import type { SyncStore, WaitingMutation } from '@/db/syncStore.types'
 import { ApiError } from './api/ApiError'
@@ -50,26 +51,25 @@ async function pushBatch({ store, api, deviceId }: PushParts, batch: readonly Wa
 }
 
 /** What to do about a batch that was refused as a whole; resolves with the size of the next one. */
-async function afterRefusal(
-  { store, enrolAnew }: PushParts,
-  batch: readonly WaitingMutation[],
-  error: unknown,
-): Promise<number> {
+async function afterRefusal(parts: PushParts, batch: readonly WaitingMutation[], error: unknown): Promise<number> {
   if (!(error instanceof ApiError)) throw error
   const { problem } = error
-  if (problem.code === 'sequence-fork') {
-    await enrolAnew()
+  if (problem.code === 'sequence-fork' || problem.code === 'sequence-gap') {
+    if (!(await canGoOnFrom(parts.store, problem, batch[0]?.seq))) await parts.enrolAnew()
     return PUSH_LIMIT
   }
-  if (problem.code === 'sequence-gap') {
-    const first = batch[0]?.seq
-    const isHeld = problem.expected !== undefined && (await store.hasSeq(problem.expected))
-    if (!isHeld || problem.expected === first) await enrolAnew()
-    return PUSH_LIMIT
-  }
-  if (problem.status !== 413 && problem.status !== 400 && problem.status !== 422) throw error
+  if (!TOO_MUCH.includes(problem.status)) throw error
   const [only] = batch
   if (batch.length > 1 || !only) return Math.max(1, Math.floor(batch.length / 2))
-  await store.setApart(only.mutationId, problem)
+  await parts.store.setApart(only.mutationId, problem)
   return PUSH_LIMIT
+}
+
+/** The whole batch was refused for its size or for one of its entries: halve it until the one is found. */
+const TOO_MUCH: readonly number[] = [400, 413, 422]
+
+/** Whether the number the server waits for is in the bag, and is another one than was just sent. */
+async function canGoOnFrom(store: SyncStore, { code, expected }: Problem, sent: number | undefined): Promise<boolean> {
+  if (code !== 'sequence-gap' || expected === undefined || expected === sent) return false
+  return store.hasSeq(expected)
 }
