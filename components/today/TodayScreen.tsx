@@ -74,7 +74,7 @@ function TodayOfBeat({ beats, current, onChoose, onOpenSheet, onOpenStreet, onOp
   const wall = countStates(buildings ?? [])
   return (
     <Screen
-      title={t('today.round', { district: beat.districtName, round: beat.roundName })}
+      title={beat.roundName}
       subtitle={t('today.beatOn', { beat: beat.name, day: formatDate(openedAt, locale, 'weekday') })}
       right={<NetworkBadge />}
       width="form"

@@ -37,31 +37,42 @@ const METHOD_OF: Readonly<Record<KnownBy, AreaMethod>> = {
 export function deriveSheet(answers: SheetAnswers): DerivedSheet {
   const finding = answers.finding?.kind ?? 'standing'
   const footprintM2 = answers.footprint?.footprintM2 ?? null
-  const year = answers.constructionYear
   return {
     finding,
     use: answers.use?.use ?? 'unknown',
     structure: answers.structure?.structure ?? 'unknown',
-    yearFrom: year?.kind === 'exact' ? year.year : year?.kind === 'between' ? year.fromYear : null,
-    yearTo: year?.kind === 'exact' ? year.year : year?.kind === 'between' ? year.toYear : null,
+    ...yearsOf(answers.constructionYear),
     footprintM2,
     ...floorAreaOf(answers, finding === 'standing' ? footprintM2 : null),
   }
 }
 
+function yearsOf(year: SheetAnswers['constructionYear']): Pick<DerivedSheet, 'yearFrom' | 'yearTo'> {
+  if (year?.kind === 'exact') return { yearFrom: year.year, yearTo: year.year }
+  if (year?.kind === 'between') return { yearFrom: year.fromYear, yearTo: year.toYear }
+  return { yearFrom: null, yearTo: null }
+}
+
 function floorAreaOf(
-  answers: SheetAnswers,
+  { storeys, attic, basement, footprint }: SheetAnswers,
   footprintM2: number | null,
 ): Pick<DerivedSheet, 'grossFloorAreaM2' | 'floorAreaCv'> {
   if (footprintM2 === null) return { grossFloorAreaM2: null, floorAreaCv: null }
-  const storeys = answers.storeys?.aboveGround ?? null
+  const counted = storeys?.aboveGround ?? null
   const grossFloorAreaM2 = grossFloorArea({
     footprintM2,
-    storeys: storeys ?? STOREYS_IF_UNKNOWN,
-    atticShare: answers.attic?.floorShare ?? 0,
-    basementShare: answers.basement?.floorShare ?? 0,
+    storeys: counted ?? STOREYS_IF_UNKNOWN,
+    ...optionalShare('atticShare', attic?.floorShare),
+    ...optionalShare('basementShare', basement?.floorShare),
   })
-  if (storeys === null) return { grossFloorAreaM2, floorAreaCv: defaultAreaCv('imputed') }
-  const methods = [answers.footprint?.knownBy, answers.storeys?.knownBy].map((known) => METHOD_OF[known ?? 'guessed'])
-  return { grossFloorAreaM2, floorAreaCv: Math.max(...methods.map(defaultAreaCv)) }
+  if (counted === null) return { grossFloorAreaM2, floorAreaCv: defaultAreaCv('imputed') }
+  return { grossFloorAreaM2, floorAreaCv: Math.max(cvOf(footprint?.knownBy), cvOf(storeys?.knownBy)) }
+}
+
+function optionalShare<Key extends string>(key: Key, share: number | null | undefined): { [name in Key]?: number } {
+  return share === null || share === undefined ? {} : ({ [key]: share } as { [name in Key]?: number })
+}
+
+function cvOf(known: KnownBy | undefined): number {
+  return defaultAreaCv(METHOD_OF[known ?? 'guessed'])
 }
