@@ -35,7 +35,7 @@ export function BagScreen({ onOpenSheet, onSignIn }: BagScreenProps) {
       title={t('bag.title')}
       subtitle={[...counts, formatBytes(bag.photoBytes, locale)].join(' · ')}
       width="form"
-      footer={<Button grow label={t('bag.handIn')} busy={isBusy} onPress={() => void handIn.handIn()} />}
+      footer={<Button kind="primary" grow label={t('bag.handIn')} busy={isBusy} onPress={() => void handIn.handIn()} />}
     >
       <HandInStatus onSignIn={onSignIn} />
       <RefusedPanel quarantined={bag.quarantined} onOpenSheet={onOpenSheet} />

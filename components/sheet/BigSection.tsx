@@ -9,6 +9,7 @@ import { Panel } from '@/components/ui/Panel'
 import { SPACE } from '@/components/ui/theme/tokens'
 import { deriveSheet, STOREYS_IF_UNKNOWN } from '@/shared/schemas/deriveSheet'
 import { formatArea, formatDecimal, formatShare } from '@/shared/format'
+import type { KnownBy } from '@/shared/schemas/sheet'
 import type { SectionProps } from './form.types'
 
 const GROUPS = ['storeys', 'footprint', 'attic', 'basement'] as const
@@ -34,7 +35,7 @@ export function BigSection(props: SectionProps) {
         onChange={(aboveGround) =>
           answer(
             'storeys',
-            aboveGround === null ? { aboveGround } : { aboveGround, knownBy: storeys?.knownBy ?? 'seen' },
+            aboveGround === null ? { aboveGround } : { aboveGround, knownBy: typedBy(storeys?.knownBy) },
           )
         }
         aside={
@@ -91,6 +92,11 @@ export function BigSection(props: SectionProps) {
       <FloorArea {...props} locale={locale} />
     </Panel>
   )
+}
+
+/** Who types another figure than the register's has looked. */
+function typedBy(before: KnownBy | undefined): KnownBy {
+  return before === undefined || before === 'register' ? 'seen' : before
 }
 
 function shareName(value: SectionProps['answers']['attic']): ShareName | null {

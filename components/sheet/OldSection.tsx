@@ -16,6 +16,7 @@ export function OldSection({ answers, offered, faults, answer }: SectionProps) {
   const { t } = useMessages()
   const year = answers.constructionYear
   const setYear = (next: ConstructionYear) => answer('constructionYear', next)
+  const typed = year && year.kind !== 'unknown' && year.knownBy === 'register' ? ({ knownBy: 'guessed' } as const) : {}
   const field = (label: string, value: number, onYear: (year: number) => void) => (
     <View style={styles.half}>
       <NumberField
@@ -23,7 +24,7 @@ export function OldSection({ answers, offered, faults, answer }: SectionProps) {
         whole
         grouping={false}
         value={value > 0 ? value : null}
-        onChange={(typed) => onYear(typed ?? 0)}
+        onChange={(entered) => onYear(entered ?? 0)}
       />
     </View>
   )
@@ -47,12 +48,12 @@ export function OldSection({ answers, offered, faults, answer }: SectionProps) {
       />
       <View style={styles.row}>
         {year?.kind === 'exact'
-          ? field(t('sheet.yearExact'), year.year, (typed) => setYear({ ...year, year: typed }))
+          ? field(t('sheet.yearExact'), year.year, (exact) => setYear({ ...year, ...typed, year: exact }))
           : null}
         {year?.kind === 'between' ? (
           <>
-            {field(t('sheet.yearFrom'), year.fromYear, (fromYear) => setYear({ ...year, fromYear }))}
-            {field(t('sheet.yearTo'), year.toYear, (toYear) => setYear({ ...year, toYear }))}
+            {field(t('sheet.yearFrom'), year.fromYear, (fromYear) => setYear({ ...year, ...typed, fromYear }))}
+            {field(t('sheet.yearTo'), year.toYear, (toYear) => setYear({ ...year, ...typed, toYear }))}
           </>
         ) : null}
       </View>

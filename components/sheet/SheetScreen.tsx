@@ -1,4 +1,4 @@
-import { useCallback, useMemo, useState } from 'react'
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { Badge } from '@/components/ui/Badge'
 import { Button } from '@/components/ui/Button'
 import { EmptyState } from '@/components/ui/EmptyState'
@@ -63,6 +63,13 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
   const say = useToast()
   const form = useSheetForm(buildingId, stored)
   const [isCameraOpen, setIsCameraOpen] = useState(false)
+  const isHere = useRef(true)
+  useEffect(() => {
+    isHere.current = true
+    return () => {
+      isHere.current = false
+    }
+  }, [])
   const { outline } = stored.building.building
   const label = buildingLabel(outline)
   const usable = useMemo(() => usableAnswers(form.answers), [form.answers])
@@ -76,7 +83,8 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
   const finish = async () => {
     if (!(await form.putInBag())) return
     say(t('sheet.putInBagDone', { label }), 'good')
-    onBack()
+    // who has walked on meanwhile is not called back
+    if (isHere.current) onBack()
   }
   const subtitle = [
     t('sheet.subtitle', { reference: outline.reference, area: formatArea(outline.footprintM2, locale) }),
@@ -98,7 +106,7 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
             label={t('sheet.photo', { count: stored.building.photoCount })}
             onPress={() => setIsCameraOpen(true)}
           />
-          <Button grow label={t('sheet.putInBag')} onPress={() => void finish()} />
+          <Button kind="primary" grow label={t('sheet.putInBag')} onPress={() => void finish()} />
         </>
       }
       aside={<EstimatePanel answers={usable} />}

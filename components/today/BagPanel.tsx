@@ -34,7 +34,7 @@ export function BagPanel({ onOpenBag }: { readonly onOpenBag: () => void }) {
           </AppText>
           <AppText soft>{parts.join(' · ')}</AppText>
         </View>
-        <Button label={t('bag.handIn')} busy={isBusy} onPress={() => void handIn.handIn()} />
+        <Button kind="primary" label={t('bag.handIn')} busy={isBusy} onPress={() => void handIn.handIn()} />
       </View>
       {stoppedBecause ? (
         <AppText tone="attention">
