@@ -22,6 +22,10 @@ export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) 
   useEffect(() => {
     if (isOpen && permission?.granted === false && permission.canAskAgain) void askPermission()
   }, [isOpen, permission, askPermission])
+  // a camera that was ready for the last picture is not ready for this one
+  useEffect(() => {
+    if (!isOpen) setIsReady(false)
+  }, [isOpen])
   const shoot = async () => {
     const picture = await camera.current?.takePictureAsync({ quality: 0.9, imageType: 'jpg' })
     if (picture) onPicture(blobOf(picture.uri))
