@@ -139,10 +139,11 @@ async function renumber(inside: Statements, deviceId: string): Promise<void> {
 }
 
 async function dropConfirmed(inside: Statements, ackSeq: number, at: string): Promise<void> {
+  const confirmed = await inside.all('SELECT 1 FROM outbox WHERE seq <= ? AND status IS NOT NULL LIMIT 1', [ackSeq])
   await inside.run('DELETE FROM outbox WHERE seq <= ? AND status IS NOT NULL', [ackSeq])
   await inside.run(
     'DELETE FROM photo WHERE is_removed = 1 AND photo_id NOT IN (SELECT entity_id FROM outbox WHERE type = ?)',
     ['photo'],
   )
-  await writeMeta(inside, 'lastHandedInAt', at)
+  if (confirmed.length > 0) await writeMeta(inside, 'lastHandedInAt', at)
 }
