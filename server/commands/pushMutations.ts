@@ -54,7 +54,7 @@ async function judgeBatch(scope: Scope, arrival: Arrival): Promise<Pick<Answer, 
   const known = await readKnownMutations(scope, {
     deviceId,
     ids: received.map(({ id }) => id),
-    seqs: received.flatMap(({ seq }) => (seq <= before ? [seq] : [])),
+    seqs: { from: received[0]?.seq ?? 0, to: Math.min(before, received.at(-1)?.seq ?? 0) },
   })
   const plan = requireOrder(planBatch(received, { lastSeq: before, ...known }))
   const freshCount = plan.steps.filter((step) => step === 'fresh').length

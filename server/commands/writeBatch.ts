@@ -1,6 +1,7 @@
 import type { Scope } from '@/server/database'
 import type { Problem } from '@/shared/schemas/problem'
 import { deriveSheet } from '@/shared/schemas/deriveSheet'
+import { uuidArray } from '@/server/queries/uuidArray'
 import type { BatchDraft, SheetWrite } from './batchDraft'
 
 /** A mutation that was judged now, as it is remembered. */
@@ -41,7 +42,7 @@ export interface BatchRecord {
 export async function writeBatch(scope: Scope, draft: BatchDraft, record: BatchRecord): Promise<void> {
   const { organisationId, personId } = scope
   const { deviceId, now } = draft.sender
-  const parts = partsOf(draft, record).filter(({ rows }) => rows.length > 0)
+  const parts = partsOf(draft, record).filter(({ count }) => count > 0)
   const steps = parts.map(({ name, sql }) => `${name} AS (${sql})`)
   await scope.execute(
     `${steps.length > 0 ? `WITH ${steps.join(',\n')}` : ''}
@@ -53,16 +54,21 @@ export async function writeBatch(scope: Scope, draft: BatchDraft, record: BatchR
       deviceId,
       now,
       lastSeq: record.lastSeq,
-      ...Object.fromEntries(parts.map(({ name, rows }) => [name, JSON.stringify(rows)])),
+      ...Object.fromEntries(parts.map(({ name, parameter }) => [name, parameter])),
     },
   )
 }
 
 interface Part {
   readonly name: string
-  readonly rows: readonly unknown[]
+  readonly count: number
+  /** The one parameter all rows of the part come from. */
+  readonly parameter: string
   readonly sql: string
 }
+
+const asJson = (rows: readonly unknown[]) => ({ count: rows.length, parameter: JSON.stringify(rows) })
+const asIds = (ids: readonly string[]) => ({ count: ids.length, parameter: uuidArray(ids) })
 
 function partsOf(draft: BatchDraft, record: BatchRecord): Part[] {
   const sheets = [...draft.sheetWrites.values()]
@@ -71,17 +77,17 @@ function partsOf(draft: BatchDraft, record: BatchRecord): Part[] {
   return [
     {
       name: 'revisions',
-      rows: sheets.filter(({ sheetId }) => draft.targets.sheets.has(sheetId)).map(({ sheetId }) => ({ sheetId })),
+      ...asIds(sheets.flatMap(({ sheetId }) => (draft.targets.sheets.has(sheetId) ? [sheetId] : []))),
       sql: KEEP_REVISIONS,
     },
-    { name: 'sheets', rows: sheets.map(sheetRow), sql: WRITE_SHEETS },
-    { name: 'photos', rows: [...draft.photoWrites.values()], sql: WRITE_PHOTOS },
-    { name: 'marks', rows: marks, sql: MARK_PHOTOS },
-    { name: 'conflicts', rows: draft.conflictWrites, sql: WRITE_CONFLICTS },
-    { name: 'settled', rows: settled, sql: SETTLE_CONFLICTS },
-    { name: 'judged', rows: record.judged, sql: WRITE_JUDGED },
-    { name: 'numbered', rows: record.numberedAgain, sql: WRITE_NUMBERED },
-    { name: 'quarantined', rows: record.quarantined, sql: WRITE_QUARANTINED },
+    { name: 'sheets', ...asJson(sheets.map(sheetRow)), sql: WRITE_SHEETS },
+    { name: 'photos', ...asJson([...draft.photoWrites.values()]), sql: WRITE_PHOTOS },
+    { name: 'marks', ...asJson(marks), sql: MARK_PHOTOS },
+    { name: 'conflicts', ...asJson(draft.conflictWrites), sql: WRITE_CONFLICTS },
+    { name: 'settled', ...asJson(settled), sql: SETTLE_CONFLICTS },
+    { name: 'judged', ...asJson(record.judged), sql: WRITE_JUDGED },
+    { name: 'numbered', ...asJson(record.numberedAgain), sql: WRITE_NUMBERED },
+    { name: 'quarantined', ...asJson(record.quarantined), sql: WRITE_QUARANTINED },
   ]
 }
 
@@ -117,9 +123,8 @@ export const REVISION_OF_SHEET = `s.organisation_id, s.sheet_id, s.revision, s.s
 
 const KEEP_REVISIONS = `
   INSERT INTO sheet_revision (organisation_id, sheet_id, revision, state, answers, by_person, at, change_no)
-  SELECT ${REVISION_OF_SHEET}
-  FROM json_to_recordset($revisions::json) AS r("sheetId" uuid)
-  JOIN sheet s ON s.organisation_id = $organisationId AND s.sheet_id = r."sheetId"
+  SELECT ${REVISION_OF_SHEET} FROM unnest($revisions::uuid[]) AS n(id)
+  CROSS JOIN LATERAL (SELECT * FROM sheet WHERE organisation_id = $organisationId AND sheet_id = n.id LIMIT 1) s
   ON CONFLICT DO NOTHING`
 
 const WRITE_SHEETS = `

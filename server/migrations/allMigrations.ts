@@ -4,6 +4,7 @@ import { m0003Planning } from './m0003Planning'
 import { m0004Sessions } from './m0004Sessions'
 import { m0005OutlineBlocks } from './m0005OutlineBlocks'
 import { m0006Sync } from './m0006Sync'
+import { m0007SheetKeys } from './m0007SheetKeys'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
@@ -14,4 +15,5 @@ export const allMigrations: readonly Migration[] = [
   m0004Sessions,
   m0005OutlineBlocks,
   m0006Sync,
+  m0007SheetKeys,
 ]

@@ -1,5 +1,6 @@
 import type { Scope } from '@/server/database'
 import type { Change } from '@/shared/schemas/sync'
+import { uuidArray } from './uuidArray'
 
 export type PulledType = Exclude<Change['type'], 'gone'>
 
@@ -34,11 +35,6 @@ export async function readChangeKeys(scope: Scope, range: ChangeRange): Promise<
     limit: range.limit,
   })
   return rows.map(({ type, id, change_no, is_gone }) => ({ type, id, change: Number(change_no), isGone: is_gone }))
-}
-
-/** Ids as one text parameter that PostgreSQL reads as uuid[]. */
-export function uuidArray(ids: readonly string[]): string {
-  return `{${ids.join(',')}}`
 }
 
 const branch = (type: PulledType, table: string, key: string, isGone: string) => `

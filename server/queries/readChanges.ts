@@ -13,7 +13,8 @@ import {
   type SheetChangeRow,
 } from '@/server/presenters/presentChange'
 import type { Change } from '@/shared/schemas/sync'
-import { uuidArray, type ChangeKey, type PulledType } from './readChangeKeys'
+import type { ChangeKey, PulledType } from './readChangeKeys'
+import { uuidArray } from './uuidArray'
 
 type Fields = ReadonlyMap<string, Change>
 

@@ -1,6 +1,7 @@
 import type { Scope } from '@/server/database'
 import type { Problem } from '@/shared/schemas/problem'
 import type { KnownMutation } from '@/shared/sync/planBatch'
+import { uuidArray } from './uuidArray'
 
 /** A mutation as it was judged when it came first. */
 export interface JudgedMutation extends KnownMutation {
@@ -26,22 +27,19 @@ interface Row {
 /** What is remembered of mutations, by their ids and by the numbers this device gave. */
 export async function readKnownMutations(
   scope: Scope,
-  { deviceId, ids, seqs }: { deviceId: string; ids: readonly string[]; seqs: readonly number[] },
+  { deviceId, ids, seqs }: { deviceId: string; ids: readonly string[]; seqs: { from: number; to: number } },
 ): Promise<KnownMutations> {
   const rows = await scope.select<Row>(
-    `WITH named AS (SELECT id::uuid AS id FROM json_array_elements_text($ids::json) AS n(id)),
-       numbered AS (SELECT number::bigint AS seq FROM json_array_elements_text($seqs::json) AS n(number))
-     SELECT a.mutation_id, NULL AS seq, a.payload_sha256, a.outcome, a.change_no, a.problem
-     FROM named n JOIN applied_mutation a ON a.organisation_id = $organisationId AND a.mutation_id = n.id
+    `SELECT a.mutation_id, NULL AS seq, a.payload_sha256, a.outcome, a.change_no, a.problem
+     FROM unnest($ids::uuid[]) AS n(id) CROSS JOIN LATERAL (
+       SELECT * FROM applied_mutation WHERE organisation_id = $organisationId AND mutation_id = n.id LIMIT 1) a
      UNION ALL
-     SELECT a.mutation_id, a.seq, a.payload_sha256, NULL, NULL, NULL
-     FROM numbered n JOIN applied_mutation a
-       ON a.organisation_id = $organisationId AND a.device_id = $deviceId AND a.seq = n.seq
+     SELECT mutation_id, seq, payload_sha256, NULL, NULL, NULL
+     FROM applied_mutation WHERE organisation_id = $organisationId AND device_id = $deviceId AND seq BETWEEN $from AND $to
      UNION ALL
-     SELECT s.mutation_id, s.seq, s.payload_sha256, NULL, NULL, NULL
-     FROM numbered n JOIN applied_sequence s
-       ON s.organisation_id = $organisationId AND s.device_id = $deviceId AND s.seq = n.seq`,
-    { organisationId: scope.organisationId, deviceId, ids: JSON.stringify(ids), seqs: JSON.stringify(seqs) },
+     SELECT mutation_id, seq, payload_sha256, NULL, NULL, NULL
+     FROM applied_sequence WHERE organisation_id = $organisationId AND device_id = $deviceId AND seq BETWEEN $from AND $to`,
+    { organisationId: scope.organisationId, deviceId, ids: uuidArray(ids), from: seqs.from, to: seqs.to },
   )
   const byId = new Map<string, JudgedMutation>()
   const bySeq = new Map<number, KnownMutation>()

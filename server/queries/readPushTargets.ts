@@ -1,5 +1,6 @@
 import type { Scope } from '@/server/database'
 import type { SheetRecord } from '@/shared/sync/sheetRecord.types'
+import { uuidArray } from './uuidArray'
 
 /** How long after losing a beat what was recorded there is still taken, by the server's clock (rule P8). */
 export const LATE_WORK_DAYS = 30
@@ -58,9 +59,9 @@ export async function readPushTargets(scope: Scope, wanted: Wanted, now: Date): 
   const [row] = await scope.select<TargetRows>(TARGETS, {
     organisationId: scope.organisationId,
     personId: scope.personId,
-    sheetIds: JSON.stringify(wanted.sheetIds),
-    photoIds: JSON.stringify(wanted.photoIds),
-    conflictIds: JSON.stringify(wanted.conflictIds),
+    sheetIds: uuidArray(wanted.sheetIds),
+    photoIds: uuidArray(wanted.photoIds),
+    conflictIds: uuidArray(wanted.conflictIds),
     lateSince: new Date(now.getTime() - LATE_WORK_DAYS * 86_400_000),
   })
   return {
@@ -114,38 +115,44 @@ export const SHEET_JSON = `json_build_object('id', s.sheet_id, 'answers', s.answ
   'deleteChange', CASE WHEN s.deleted_at IS NOT NULL THEN coalesce(s.delete_change, s.change_no) END,
   'deleteDevice', s.delete_device)`
 
+/**
+ * Rows of a table by ids, each found by its key: the LIMIT keeps the planner from reading all rows of an organisation
+ * where it does not know yet how many there are.
+ */
+const byId = (table: string, key: string, ids: string) => `
+  SELECT t.* FROM ${ids} AS n(id) CROSS JOIN LATERAL (
+    SELECT * FROM ${table} WHERE organisation_id = $organisationId AND ${key} = n.id LIMIT 1) t`
+
 const TARGETS = `
-  WITH named_photo AS (
-    SELECT p.* FROM photo p JOIN json_array_elements_text($photoIds::json) AS n(id) ON p.photo_id = n.id::uuid
-    WHERE p.organisation_id = $organisationId
-  ), named_conflict AS (
-    SELECT c.* FROM conflict c JOIN json_array_elements_text($conflictIds::json) AS n(id) ON c.conflict_id = n.id::uuid
-    WHERE c.organisation_id = $organisationId
-  ), named AS (
-    SELECT id::uuid AS id FROM json_array_elements_text($sheetIds::json) AS n(id)
+  WITH named_photo AS MATERIALIZED (${byId('photo', 'photo_id', 'unnest($photoIds::uuid[])')}),
+  named_conflict AS MATERIALIZED (${byId('conflict', 'conflict_id', 'unnest($conflictIds::uuid[])')}),
+  named AS MATERIALIZED (
+    SELECT id FROM unnest($sheetIds::uuid[]) AS n(id)
     UNION SELECT sheet_id FROM named_photo UNION SELECT sheet_id FROM named_conflict
-  )
+  ), named_building AS MATERIALIZED (${byId('round_building', 'building_id', 'named')})
   SELECT
     (SELECT json_agg(json_build_object('id', b.building_id, 'roundId', b.round_id, 'outlineId', b.outline_id,
-        'beatId', b.beat_id, 'isAllowed', coalesce(own.surveyor_id = $personId AND own.deleted_at IS NULL, false) OR EXISTS (
+        'beatId', b.beat_id, 'isAllowed', b.beat_id IN (
+          SELECT o.beat_id FROM beat o
+          WHERE o.organisation_id = $organisationId AND o.surveyor_id = $personId AND o.deleted_at IS NULL
+        ) IS TRUE OR EXISTS (
           SELECT FROM beat_assignment a
           WHERE a.organisation_id = $organisationId AND a.person_id = $personId
             AND (a.until_at IS NULL OR a.until_at > $lateSince)
-            AND (a.beat_id = b.beat_id OR a.beat_id IN (
-              SELECT e.beat_id FROM scope_exit e
+            AND (a.beat_id = b.beat_id OR EXISTS (
+              SELECT FROM scope_exit e
               WHERE e.organisation_id = $organisationId AND e.beat_id = a.beat_id AND e.entity_type = 'building'
                 AND e.entity_id = b.building_id AND e.at > $lateSince)))))
-      FROM named n JOIN round_building b ON b.organisation_id = $organisationId AND b.building_id = n.id
-      LEFT JOIN beat own ON own.organisation_id = b.organisation_id AND own.beat_id = b.beat_id) AS buildings,
-    (SELECT json_agg(${SHEET_JSON})
-      FROM named n JOIN sheet s ON s.organisation_id = $organisationId AND s.sheet_id = n.id) AS sheets,
+      FROM named_building b) AS buildings,
+    (SELECT json_agg(${SHEET_JSON}) FROM (${byId('sheet', 'sheet_id', 'named')}) s) AS sheets,
     (SELECT json_agg(json_build_object('id', p.photo_id, 'sheetId', p.sheet_id, 'sha256', p.sha256, 'bytes', p.bytes,
         'takenBy', p.taken_by, 'change', p.change_no, 'isDeleted', p.deleted_at IS NOT NULL)) FROM named_photo p) AS photos,
     (SELECT json_agg(json_build_object('id', c.conflict_id, 'sheetId', c.sheet_id, 'group', c.field_group,
         'setAside', c.set_aside, 'keptBy', c.kept_by, 'setAsideBy', c.set_aside_by, 'isOpen', c.state = 'open',
         'change', c.change_no)) FROM named_conflict c) AS conflicts,
-    (SELECT json_agg(json_build_object('id', q.entity_id, 'mutationId', q.mutation_id) ORDER BY q.received_at)
-      FROM quarantine q
-      WHERE q.organisation_id = $organisationId AND q.state = 'waiting' AND q.person_id = $personId
-        AND q.entity_id IN (SELECT id FROM named UNION ALL
-          SELECT id::uuid FROM json_array_elements_text($photoIds::json) AS m(id))) AS rejected`
+    (SELECT json_agg(json_build_object('id', m.entity_id, 'mutationId', m.mutation_id))
+      FROM unnest($sheetIds::uuid[] || $photoIds::uuid[]) AS n(id) CROSS JOIN LATERAL (
+        SELECT q.entity_id, q.mutation_id FROM quarantine q
+        WHERE q.organisation_id = $organisationId AND q.state = 'waiting' AND q.entity_id = n.id
+          AND q.person_id = $personId
+        ORDER BY q.received_at DESC LIMIT 1) m) AS rejected`

@@ -1,6 +1,6 @@
 import type { Scope } from '@/server/database'
 import type { SyncDigest } from '@/shared/sync/syncDigest'
-import { uuidArray } from './readChangeKeys'
+import { uuidArray } from './uuidArray'
 
 /** Digest of everything that is there in some beats: the same figure as `syncDigest` of what the device holds. */
 export async function readSyncDigest(scope: Scope, beatIds: readonly string[]): Promise<SyncDigest> {

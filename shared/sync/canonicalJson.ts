@@ -8,10 +8,15 @@
 export function canonicalJson(value: unknown): string {
   if (typeof value !== 'object' || value === null) return JSON.stringify(value) ?? 'null'
   if (Array.isArray(value)) return `[${value.map(canonicalJson).join(',')}]`
-  const parts: string[] = []
-  for (const key of Object.keys(value).sort()) {
-    const part: unknown = Reflect.get(value, key)
-    if (part !== undefined) parts.push(`${JSON.stringify(key)}:${canonicalJson(part)}`)
+  return canonicalObject(value)
+}
+
+function canonicalObject(value: object): string {
+  const entries: Readonly<Record<string, unknown>> = { ...value }
+  let text = ''
+  for (const key of Object.keys(entries).sort()) {
+    const part = entries[key]
+    if (part !== undefined) text += `${text === '' ? '' : ','}${JSON.stringify(key)}:${canonicalJson(part)}`
   }
-  return `{${parts.join(',')}}`
+  return `{${text}}`
 }

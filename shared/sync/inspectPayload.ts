@@ -39,7 +39,14 @@ function inspectKeys(keys: readonly string[]): PayloadFault | null {
   return null
 }
 
+/** NUL and halves of surrogate pairs; whole pairs are looked at one by one. */
+const SUSPECT = /[\0\ud800-\udfff]/
+
 function isWellFormed(text: string): boolean {
+  return !SUSPECT.test(text) || hasWholePairsOnly(text)
+}
+
+function hasWholePairsOnly(text: string): boolean {
   for (let index = 0; index < text.length; index += 1) {
     const code = text.charCodeAt(index)
     if (code === 0) return false
