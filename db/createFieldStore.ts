@@ -89,6 +89,8 @@ async function putInBag(inside: Statements, buildingId: string, stamp: Stamp): P
   if (Object.keys(set).length > 0) {
     const change = { op: 'set', type: 'sheet', entity: buildingId, seen: draft.seen, set } as const
     await appendMutation(inside, change, buildingId, stamp)
+    // its answers came back into the draft when it was refused, and go with this one
+    await inside.run("DELETE FROM quarantine WHERE type = 'sheet' AND building_id = ?", [buildingId])
   }
   await inside.run('DELETE FROM draft WHERE building_id = ?', [buildingId])
 }

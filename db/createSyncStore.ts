@@ -1,11 +1,12 @@
 import type { MutationOutcome } from '@/shared/schemas/sync'
 import type { Problem } from '@/shared/schemas/problem'
+import type { SheetAnswers } from '@/shared/schemas/sheet'
 import { syncDigest } from '@/shared/sync/syncDigest'
 import { applyPage } from './applyPage'
 import type { Driver, Statements } from './driver.types'
 import { readMeta, removeMeta, writeMeta } from './metaTable'
 import type { PhotoFiles } from './photoFiles.types'
-import { readColumn, type OutboxRow, type PhotoRow } from './rows'
+import { readColumn, type DraftRow, type OutboxRow, type PhotoRow } from './rows'
 import type { SyncStore, WaitingMutation } from './syncStore.types'
 
 export interface SyncStoreParts {
@@ -113,12 +114,31 @@ async function setApart(inside: Statements, mutationId: string, problem: Problem
      ON CONFLICT (mutation_id) DO UPDATE SET problem = excluded.problem`,
     [JSON.stringify(problem), now.toISOString(), mutationId],
   )
+  await returnToDraft(inside, mutationId, now)
   await inside.run(
     `UPDATE photo SET place = 'refused', refusal = ?
      WHERE photo_id = (SELECT entity_id FROM outbox WHERE mutation_id = ? AND type = 'photo')`,
     [problem.detail, mutationId],
   )
   await inside.run('DELETE FROM outbox WHERE mutation_id = ?', [mutationId])
+}
+
+/** What was refused opens in the form again, under what was written since, so that it can be mended. */
+async function returnToDraft(inside: Statements, mutationId: string, now: Date): Promise<void> {
+  const [refused] = await inside.all<OutboxRow>(
+    "SELECT * FROM outbox WHERE mutation_id = ? AND type = 'sheet' AND payload ->> 'op' = 'set'",
+    [mutationId],
+  )
+  if (!refused) return
+  const { building_id: buildingId, payload } = refused
+  const [draft] = await inside.all<DraftRow>('SELECT * FROM draft WHERE building_id = ?', [buildingId])
+  const { set, seen } = JSON.parse(payload) as { set: SheetAnswers; seen: number }
+  const answers = { ...set, ...readColumn.draft(draft?.answers ?? '{}') }
+  await inside.run(
+    `INSERT INTO draft (building_id, answers, seen, kept_at) VALUES (?, ?, ?, ?)
+     ON CONFLICT (building_id) DO UPDATE SET answers = excluded.answers`,
+    [buildingId, JSON.stringify(answers), seen, now.toISOString()],
+  )
 }
 
 /** Same work, same ids, numbers from 1: what the new device id hands in first (P4). */

@@ -119,6 +119,21 @@ describe('createHandIn', () => {
     expect(here.server.order).toHaveLength(1)
   })
 
+  it('P6 opens what was refused in the form again, and forgets the refusal when it is put in the bag anew', async () => {
+    const here = await setting()
+    await record(here.phone, 7)
+    const [first] = (await here.phone.field.readBag()).entries
+    here.server.refused.add(first?.mutationId ?? '')
+    await here.handIn.handIn()
+    expect((await here.phone.field.readSheet(BUILDING_ID))?.draft.storeys?.aboveGround).toBe(7)
+
+    await here.phone.field.putInBag(BUILDING_ID)
+    await here.handIn.handIn()
+
+    expect((await here.phone.field.readBag()).quarantined).toEqual([])
+    expect(await stateOf(here)).toBe('handed-in')
+  })
+
   it('P4 enrols anew with the same ids when its numbers stand for other work', async () => {
     const here = await setting()
     await record(here.phone, 1)

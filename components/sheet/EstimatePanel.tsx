@@ -22,10 +22,12 @@ export function EstimatePanel({ answers }: { readonly answers: SheetAnswers }) {
     <Panel title={t('sheet.estimate')} note={edition ? t('sheet.estimateNote') : undefined}>
       {estimate ? (
         <>
-          <AppText kind="figure">{t('sheet.estimateAbout', { mass: formatMass(estimate.massKg, locale) })}</AppText>
+          <AppText kind="figure">
+            {t('sheet.estimateAbout', { mass: formatMass(twoDigits(estimate.massKg), locale) })}
+          </AppText>
           <AppText soft>
             {[
-              formatMassRange(estimate.lowKg, estimate.highKg, locale),
+              formatMassRange(twoDigits(estimate.lowKg), twoDigits(estimate.highKg), locale),
               ...(estimate.narrowedBy ? [t('sheet.narrows', { answer: t(`sheet.group.${estimate.narrowedBy}`) })] : []),
             ].join(' · ')}
           </AppText>
@@ -39,4 +41,9 @@ export function EstimatePanel({ answers }: { readonly answers: SheetAnswers }) {
       )}
     </Panel>
   )
+}
+
+/** A guess from the street bears two digits, no more. */
+function twoDigits(massKg: number): number {
+  return Number(massKg.toPrecision(2))
 }

@@ -81,8 +81,10 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
   }
   const stands = !form.answers.finding || form.answers.finding.kind === 'standing'
   const finish = async () => {
-    if (!(await form.putInBag())) return
-    say(t('sheet.putInBagDone', { label }), 'good')
+    const ending = await form.putInBag()
+    if (ending === 'not-ready') return
+    if (ending === 'nothing-changed') say(t('sheet.nothingChanged'), 'attention')
+    else say(t('sheet.putInBagDone', { label }), 'good')
     // who has walked on meanwhile is not called back
     if (isHere.current) onBack()
   }

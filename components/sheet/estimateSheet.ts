@@ -1,4 +1,6 @@
 import { intensityFor } from '@/shared/compute/factors/intensityFor'
+import type { ArchetypeAttribute } from '@/shared/compute/factors/intensity.types'
+import { POOLING_CV } from '@/shared/compute/factors/sharedCvDefaults'
 import { periodOfYear } from '@/shared/compute/factors/periodOfYear'
 import { MATERIALS, type Material, type PeriodIdOrUnknown } from '@/shared/compute/factors/vocabulary'
 import { lognormalFromMean, lognormalQuantile } from '@/shared/compute/uncertainty/lognormal'
@@ -28,7 +30,8 @@ export function estimateSheet(answers: SheetAnswers, edition: EditionForDevice):
     if (found.kind !== 'known') return []
     const between = Math.max(0, ...found.parts.map(({ betweenBuildingsCv }) => betweenBuildingsCv ?? 0))
     const massKg = found.meanKgPerM2 * grossFloorAreaM2
-    return massKg > 0 ? [{ material, massKg, cv: productCv([found.sharedCv, between]).exact }] : []
+    const cv = productCv([found.sharedCv, between]).exact
+    return massKg > 0 ? [{ material, massKg, cv, pooledOver: found.pooledOver }] : []
   })
   const massKg = parts.reduce((sum, part) => sum + part.massKg, 0)
   if (massKg === 0) return null
@@ -39,19 +42,32 @@ export function estimateSheet(answers: SheetAnswers, edition: EditionForDevice):
     lowKg: lognormalQuantile(total, 0.1),
     highKg: lognormalQuantile(total, 0.9),
     parts: parts.map(({ material, massKg: mass }) => ({ material, massKg: mass })).sort((a, b) => b.massKg - a.massKg),
-    narrowedBy: narrowedBy(answers, derived),
+    narrowedBy: narrowedBy(answers, parts),
   }
 }
 
 function periodOf({ yearFrom, yearTo }: DerivedSheet): PeriodIdOrUnknown {
   if (yearFrom === null || yearTo === null) return 'unknown'
-  const middle = periodOfYear(Math.round((yearFrom + yearTo) / 2))
-  return middle
+  return periodOfYear(Math.round((yearFrom + yearTo) / 2))
 }
 
-function narrowedBy(answers: SheetAnswers, derived: DerivedSheet): SheetEstimate['narrowedBy'] {
-  if (derived.structure === 'unknown') return 'structure'
-  if (derived.yearFrom === null) return 'constructionYear'
-  if (derived.use === 'unknown') return 'use'
+/** The missing answer over which the factors had to be pooled most, by mass; storeys when only they are missing. */
+function narrowedBy(answers: SheetAnswers, pooled: readonly Pooled[]): SheetEstimate['narrowedBy'] {
+  const doubtOf = (attribute: ArchetypeAttribute) =>
+    POOLING_CV[attribute] *
+    pooled.reduce((sum, { massKg, pooledOver }) => sum + (pooledOver.includes(attribute) ? massKg : 0), 0)
+  const derived = deriveSheet(answers)
+  const missing: readonly ArchetypeAttribute[] = [
+    ...(derived.structure === 'unknown' ? (['structure'] as const) : []),
+    ...(derived.use === 'unknown' ? (['use'] as const) : []),
+    ...(derived.yearFrom === null ? (['period'] as const) : []),
+  ]
+  const [most] = [...missing].sort((a, b) => doubtOf(b) - doubtOf(a))
+  if (most && doubtOf(most) > 0) return most === 'period' ? 'constructionYear' : most
   return answers.storeys?.aboveGround ? null : 'storeys'
+}
+
+interface Pooled {
+  readonly massKg: number
+  readonly pooledOver: readonly ArchetypeAttribute[]
 }

@@ -48,19 +48,30 @@ export function useSheetForm(buildingId: string, stored: StoredSheet) {
     setDraft(next)
     setKeeping({ kind: 'keeping', at: null, reason: null })
   }
-  const answer: SectionProps['answer'] = (group, value) => keepSoon({ ...draft, [group]: value })
+  // what a refusal brought back into the stored draft meanwhile is kept as well
+  const whole: SheetAnswers = { ...stored.draft, ...draft }
+  const answer: SectionProps['answer'] = (group, value) => keepSoon({ ...whole, [group]: value })
   const unready = useMemo(() => unreadyGroups(answers), [answers])
 
-  /** Puts it in the bag with what the register offered; resolves with whether it is there. */
-  const putInBag = async (): Promise<boolean> => {
+  /** Puts it in the bag with what the register offered. */
+  const putInBag = async (): Promise<'done' | 'not-ready' | 'nothing-changed'> => {
     setIsTried(true)
-    if (unready.length > 0) return false
-    keepSoon({ ...draft, ...Object.fromEntries([...offered].map((group) => [group, answers[group]])) })
+    if (unready.length > 0) return 'not-ready'
+    const taken = Object.fromEntries(offersTaken(answers, offered).map((group) => [group, answers[group]]))
+    if (Object.keys({ ...whole, ...taken }).length === 0) return 'nothing-changed'
+    keepSoon({ ...whole, ...taken })
     await keepNow()
     await store.putInBag(buildingId)
-    return true
+    void globalThis.navigator?.storage?.persist?.().catch(() => undefined)
+    return 'done'
   }
   return { answers, offered, answer, unready: isTried ? unready : [], keeping, putInBag }
+}
+
+/** What the register offers of a building counts only where one stands. */
+function offersTaken(answers: SheetAnswers, offered: ReadonlySet<SheetGroup>): readonly SheetGroup[] {
+  const stands = answers.finding?.kind === 'standing'
+  return [...offered].filter((group) => stands || group === 'finding')
 }
 
 /** Groups that are missing or not right yet. */

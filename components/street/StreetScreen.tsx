@@ -19,6 +19,7 @@ import { formatDistance } from '@/shared/format'
 import { useStored } from '@/sync/react/FieldProvider'
 import { BuildingList } from './BuildingList'
 import { fitsSearch, orderBuildings } from './orderBuildings'
+import { PaintMark } from './PaintMark'
 import { statePaint } from './statePaint'
 import { useOwnPosition } from './useOwnPosition'
 import { WalkCaution } from './WalkCaution'
@@ -176,7 +177,7 @@ function BeatMap({ label, beatId, buildings, position, onOpenSheet }: BeatMapPro
   const entries = DEVICE_SHEET_STATES.map((state) => ({
     key: state,
     label: t(`vocabulary.state.${state}`),
-    colour: statePaint(state, colours).fill ?? colours.action,
+    mark: <PaintMark paint={statePaint(state, colours)} />,
   }))
   return (
     <OutlineMap

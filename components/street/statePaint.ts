@@ -7,7 +7,7 @@ export function statePaint(state: DeviceSheetState, colours: Colours): OutlinePa
   const edge = { outline: colours.rule }
   switch (state) {
     case 'handed-in':
-      return { ...edge, fill: colours.good, opacity: 0.75 }
+      return { ...edge, fill: colours.good, opacity: 0.45 }
     case 'checked':
       return { ...edge, fill: colours.good }
     case 'in-the-bag':
