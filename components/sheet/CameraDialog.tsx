@@ -18,6 +18,7 @@ export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) 
   const camera = useRef<CameraView>(null)
   const [permission, askPermission] = useCameraPermissions()
   const [isReady, setIsReady] = useState(false)
+  const [hasFailed, setFailed] = useState(false)
   const isDenied = permission?.granted === false && !permission.canAskAgain
   useEffect(() => {
     if (isOpen && permission?.granted === false && permission.canAskAgain) void askPermission()
@@ -27,8 +28,10 @@ export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) 
     if (!isOpen) setIsReady(false)
   }, [isOpen])
   const shoot = async () => {
-    const picture = await camera.current?.takePictureAsync({ quality: 0.9, imageType: 'jpg' })
+    setFailed(false)
+    const picture = await takePicture(camera.current)
     if (picture) onPicture(blobOf(picture.uri))
+    else setFailed(true)
   }
   return (
     <Dialog
@@ -40,6 +43,7 @@ export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) 
       }
     >
       {isDenied ? <AppText tone="attention">{t('sheet.cameraDenied')}</AppText> : null}
+      {hasFailed ? <AppText tone="attention">{t('sheet.cameraFailed')}</AppText> : null}
       {isOpen && permission?.granted ? (
         <View style={styles.frame}>
           <CameraView ref={camera} facing="back" style={styles.camera} onCameraReady={() => setIsReady(true)} />
@@ -47,6 +51,23 @@ export function CameraDialog({ isOpen, onClose, onPicture }: CameraDialogProps) 
       ) : null}
     </Dialog>
   )
+}
+
+const MOST_TRIES = 15
+const BETWEEN_TRIES_MS = 200
+
+/** A camera says it is ready a moment before its first frame is there: asked again until it has one. */
+async function takePicture(camera: CameraView | null): Promise<{ uri: string } | null> {
+  for (let tries = 0; camera && tries < MOST_TRIES; tries++) {
+    try {
+      const picture = await camera.takePictureAsync({ quality: 0.9, imageType: 'jpg' })
+      if (picture) return picture
+    } catch {
+      // no frame yet
+    }
+    await new Promise((resolve) => setTimeout(resolve, BETWEEN_TRIES_MS))
+  }
+  return null
 }
 
 /** The bytes of a data URI. */
