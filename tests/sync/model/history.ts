@@ -5,7 +5,8 @@ import { FAULTS, ModelPhone } from './modelPhone'
 import { BEATS, BUILDINGS } from './modelDistrict'
 import { ModelServer } from './modelServer'
 
-const BAD = 13
+/** A value that the server refuses. */
+export const BAD = 13
 const phone = fc.nat(3)
 const building = fc.constantFrom(...BUILDINGS)
 const choice = fc.constantFrom('kept' as const, 'set-aside' as const)
@@ -53,10 +54,12 @@ const event = fc.oneof(
     arbitrary: fc.record({ kind: fc.constant('move' as const), building, beat: fc.constantFrom(...BEATS, null) }),
   },
 )
-type Event = typeof event extends fc.Arbitrary<infer Value> ? Value : never
+export type HistoryEvent = typeof event extends fc.Arbitrary<infer Value> ? Value : never
 
 /** `size: 'max'`: by default lists stay near ten entries, and that hides faults. */
-export const history = fc.array(event, { minLength: 1, maxLength: 100, size: 'max' })
+export function historyOf(maxLength: number) {
+  return fc.array(event, { minLength: 1, maxLength, size: 'max' })
+}
 
 /**
  * Plays a history, then lets every phone sync in peace, and checks that nothing was lost, nothing done twice, and all
@@ -64,7 +67,7 @@ export const history = fc.array(event, { minLength: 1, maxLength: 100, size: 'ma
  *
  * @throws {Error} saying what went wrong
  */
-export function playHistory(events: readonly Event[], broken: Break | null = null): void {
+export function playHistory(events: readonly HistoryEvent[], broken: Break | null = null): void {
   const server = new ModelServer(broken)
   const phones = [0, 1, 2, 3].map((index) => new ModelPhone(`d${index}`, `p${index % 2}`, broken))
   for (const one of phones) one.sync(server, 'ok', 3)
@@ -92,7 +95,7 @@ function drain(server: ModelServer, phones: readonly ModelPhone[]): void {
   for (const one of phones) one.sync(server, 'ok', 3)
 }
 
-function play(server: ModelServer, phones: readonly ModelPhone[], happening: Event): void {
+function play(server: ModelServer, phones: readonly ModelPhone[], happening: HistoryEvent): void {
   if ('phone' in happening) return playOnPhone(server, phones[happening.phone]!, happening)
   switch (happening.kind) {
     case 'review':
@@ -106,7 +109,7 @@ function play(server: ModelServer, phones: readonly ModelPhone[], happening: Eve
   }
 }
 
-function playOnPhone(server: ModelServer, one: ModelPhone, happening: Extract<Event, { phone: number }>): void {
+function playOnPhone(server: ModelServer, one: ModelPhone, happening: Extract<HistoryEvent, { phone: number }>): void {
   switch (happening.kind) {
     case 'write': {
       const { building: sheetId, group, value } = happening
@@ -137,7 +140,7 @@ function resolve(
   if (conflict) one.save(conflict.buildingId, { kind: 'resolve', conflictId: conflict.id, choice: made }, conflict)
 }
 
-function answerOf(group: number, value: number): SheetAnswers {
+export function answerOf(group: number, value: number): SheetAnswers {
   if (group === 0) return { storeys: { aboveGround: value + 1, knownBy: 'seen' } }
   if (group === 1) return { footprint: { footprintM2: value + 1, knownBy: 'guessed' } }
   if (group === 2) return { notes: { text: `note ${value}` } }

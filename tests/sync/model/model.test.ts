@@ -1,8 +1,9 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { history, playHistory } from './history'
+import { historyOf, playHistory } from './history'
 import { BREAKS } from './model.types'
 
+const history = historyOf(100)
 const SEED = 20_261_201
 /** More by hand: MODEL_RUNS=30000. */
 const RUNS = Number(process.env.MODEL_RUNS ?? 1_500)
