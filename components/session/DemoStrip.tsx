@@ -9,7 +9,11 @@ export function DemoStrip() {
   const { t } = useMessages()
   const { colours } = useTheme()
   return (
-    <View role="note" style={[styles.strip, { borderBottomColor: colours.hairline }]}>
+    <View
+      role="complementary"
+      aria-label={t('common.demo')}
+      style={[styles.strip, { borderBottomColor: colours.hairline }]}
+    >
       <AppText kind="label" soft>
         {t('auth.demoStrip')}
       </AppText>

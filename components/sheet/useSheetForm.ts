@@ -1,5 +1,6 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import type { StoredSheet } from '@/db/fieldStore.types'
+import { KEEP_NOW } from '@/db/keepNow'
 import { sheetGroups, sheetReadyForBag, SHEET_GROUPS, type SheetAnswers, type SheetGroup } from '@/shared/schemas/sheet'
 import { useField } from '@/sync/react/FieldProvider'
 import { answersFromRegister } from './answersFromRegister'
@@ -92,9 +93,11 @@ function keepWhenLeft(keep: () => void): () => void {
     if (document.visibilityState === 'hidden') keep()
   }
   window.addEventListener('pagehide', keep)
+  window.addEventListener(KEEP_NOW, keep)
   document.addEventListener('visibilitychange', onHidden)
   return () => {
     window.removeEventListener('pagehide', keep)
+    window.removeEventListener(KEEP_NOW, keep)
     document.removeEventListener('visibilitychange', onHidden)
     keep()
   }

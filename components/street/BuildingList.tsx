@@ -36,10 +36,12 @@ export function BuildingList({ buildings, onOpen }: BuildingListProps) {
     return <EmptyState title={t('street.nothingFound')} text={t('street.nothingFoundText')} />
   }
   return (
-    <View role="list">
-      {buildings.slice(0, shown).map((placed) => (
-        <Row key={placed.stored.buildingId} placed={placed} onOpen={onOpen} />
-      ))}
+    <View>
+      <View role="list">
+        {buildings.slice(0, shown).map((placed) => (
+          <Row key={placed.stored.buildingId} placed={placed} onOpen={onOpen} />
+        ))}
+      </View>
       {buildings.length > shown ? (
         <Button
           kind="quiet"
