@@ -82,7 +82,7 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
   const stands = !form.answers.finding || form.answers.finding.kind === 'standing'
   const finish = async () => {
     const ending = await form.putInBag()
-    if (ending === 'not-ready') return
+    if (ending === 'not-ready' || ending === 'not-kept') return
     if (ending === 'nothing-changed') say(t('sheet.nothingChanged'), 'attention')
     else say(t('sheet.putInBagDone', { label }), 'good')
     // who has walked on meanwhile is not called back

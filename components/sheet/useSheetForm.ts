@@ -22,16 +22,23 @@ export function useSheetForm(buildingId: string, stored: StoredSheet) {
   const [isTried, setIsTried] = useState(false)
   const waiting = useRef<{ draft: SheetAnswers; timer: ReturnType<typeof setTimeout> } | null>(null)
 
-  const keepNow = useCallback(async () => {
+  // an answer that arrives late, as a position does, is added to what was typed meanwhile
+  const typed = useRef<SheetAnswers>(stored.draft)
+  const storedDraft = useRef<SheetAnswers>(stored.draft)
+  useEffect(() => void (storedDraft.current = stored.draft), [stored])
+
+  const keepNow = useCallback(async (): Promise<boolean> => {
     const due = waiting.current
-    if (!due) return
+    if (!due) return true
     clearTimeout(due.timer)
     waiting.current = null
     try {
       const { keptAt } = await store.keepDraft(buildingId, due.draft)
       setKeeping({ kind: 'kept', at: keptAt, reason: null })
+      return true
     } catch (error) {
-      setKeeping({ kind: 'failed', at: null, reason: error instanceof Error ? error.message : String(error) })
+      setKeeping(failedBy(error))
+      return false
     }
   }, [store, buildingId])
   useEffect(() => keepWhenLeft(() => void keepNow()), [keepNow])
@@ -46,27 +53,38 @@ export function useSheetForm(buildingId: string, stored: StoredSheet) {
   const keepSoon = (next: SheetAnswers) => {
     if (waiting.current) clearTimeout(waiting.current.timer)
     waiting.current = { draft: next, timer: setTimeout(() => void keepNow(), KEEP_AFTER_MS) }
+    typed.current = next
     setDraft(next)
     setKeeping({ kind: 'keeping', at: null, reason: null })
   }
   // what a refusal brought back into the stored draft meanwhile is kept as well
-  const whole: SheetAnswers = { ...stored.draft, ...draft }
-  const answer: SectionProps['answer'] = (group, value) => keepSoon({ ...whole, [group]: value })
+  const whole = (): SheetAnswers => ({ ...storedDraft.current, ...typed.current })
+  const answer: SectionProps['answer'] = (group, value) => keepSoon({ ...whole(), [group]: value })
   const unready = useMemo(() => unreadyGroups(answers), [answers])
 
   /** Puts it in the bag with what the register offered. */
-  const putInBag = async (): Promise<'done' | 'not-ready' | 'nothing-changed'> => {
+  const putInBag = async (): Promise<'done' | 'not-ready' | 'nothing-changed' | 'not-kept'> => {
     setIsTried(true)
     if (unready.length > 0) return 'not-ready'
     const taken = Object.fromEntries(offersTaken(answers, offered).map((group) => [group, answers[group]]))
-    if (Object.keys({ ...whole, ...taken }).length === 0) return 'nothing-changed'
-    keepSoon({ ...whole, ...taken })
-    await keepNow()
-    await store.putInBag(buildingId)
+    if (Object.keys({ ...whole(), ...taken }).length === 0) return 'nothing-changed'
+    keepSoon({ ...whole(), ...taken })
+    // what is not on the disk must not be left behind by a bag that is
+    if (!(await keepNow())) return 'not-kept'
+    try {
+      await store.putInBag(buildingId)
+    } catch (error) {
+      setKeeping(failedBy(error))
+      return 'not-kept'
+    }
     void globalThis.navigator?.storage?.persist?.().catch(() => undefined)
     return 'done'
   }
   return { answers, offered, answer, unready: isTried ? unready : [], keeping, putInBag }
+}
+
+function failedBy(error: unknown): Keeping {
+  return { kind: 'failed', at: null, reason: error instanceof Error ? error.message : String(error) }
 }
 
 /** What the register offers of a building counts only where one stands. */
