@@ -91,6 +91,7 @@ function partsOf(draft: BatchDraft, record: BatchRecord): Part[] {
   ]
 }
 
+/** Columns that are null are left out: the text is read token by token. */
 function sheetRow({ sheetId, building, record, recordedBy, change }: SheetWrite) {
   const { finding, use, structure, ...derived } = deriveSheet(record.answers)
   return {
@@ -103,10 +104,10 @@ function sheetRow({ sheetId, building, record, recordedBy, change }: SheetWrite)
     writers: record.writers,
     state: record.state,
     revision: record.revision,
-    question: record.question,
+    question: record.question ?? undefined,
     reviewChange: record.reviewChange,
-    deleteChange: record.deletion?.change ?? null,
-    deleteDevice: record.deletion?.deviceId ?? null,
+    deleteChange: record.deletion?.change,
+    deleteDevice: record.deletion?.deviceId,
     recordedBy,
     change,
     finding,

@@ -5,6 +5,7 @@ import { m0004Sessions } from './m0004Sessions'
 import { m0005OutlineBlocks } from './m0005OutlineBlocks'
 import { m0006Sync } from './m0006Sync'
 import { m0007SheetKeys } from './m0007SheetKeys'
+import { m0008SheetRecorder } from './m0008SheetRecorder'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
@@ -16,4 +17,5 @@ export const allMigrations: readonly Migration[] = [
   m0005OutlineBlocks,
   m0006Sync,
   m0007SheetKeys,
+  m0008SheetRecorder,
 ]

@@ -8,14 +8,17 @@
 export function canonicalJson(value: unknown): string {
   if (typeof value !== 'object' || value === null) return JSON.stringify(value) ?? 'null'
   if (Array.isArray(value)) return `[${value.map(canonicalJson).join(',')}]`
-  return canonicalObject(value)
+  return isRecord(value) ? canonicalObject(value) : 'null'
 }
 
-function canonicalObject(value: object): string {
-  const entries: Readonly<Record<string, unknown>> = { ...value }
+function isRecord(value: object): value is Readonly<Record<string, unknown>> {
+  return !Array.isArray(value)
+}
+
+function canonicalObject(value: Readonly<Record<string, unknown>>): string {
   let text = ''
-  for (const key of Object.keys(entries).sort()) {
-    const part = entries[key]
+  for (const key of Object.keys(value).sort()) {
+    const part = value[key]
     if (part !== undefined) text += `${text === '' ? '' : ','}${JSON.stringify(key)}:${canonicalJson(part)}`
   }
   return `{${text}}`
