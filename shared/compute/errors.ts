@@ -12,6 +12,7 @@ export type ComputeErrorCode =
   | 'mixed-area-bases'
   | 'unit-mismatch'
   | 'factor-missing'
+  | 'factor-ambiguous'
   | 'interval-reversed'
   | 'interval-open'
   | 'stratum-too-small'

@@ -1,6 +1,6 @@
 import { ComputeError } from '@/shared/compute/errors'
 import { sum } from '@/shared/compute/sum'
-import { normalQuantile } from '@/shared/compute/uncertainty/quantiles'
+import { normalQuantile } from '@/shared/compute/uncertainty/normalQuantile'
 import { requireLives, type ObservedLife } from './observedLives'
 
 export interface ExponentialFit {

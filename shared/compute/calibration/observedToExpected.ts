@@ -2,7 +2,7 @@ import { logSurvival } from '@/shared/compute/lifetime/logSurvival'
 import type { Lifetime } from '@/shared/compute/lifetime/lifetime.types'
 import { ComputeError } from '@/shared/compute/errors'
 import { sum } from '@/shared/compute/sum'
-import { chiSquareQuantile } from '@/shared/compute/uncertainty/quantiles'
+import { chiSquareQuantile } from '@/shared/compute/uncertainty/chiSquareQuantile'
 import { requireLives, type ObservedLife } from './observedLives'
 
 /** Fewer demolitions than this are reported, and never applied by themselves. Common practice. */

@@ -1,4 +1,4 @@
-import { normalQuantile } from '@/shared/compute/uncertainty/quantiles'
+import { normalQuantile } from '@/shared/compute/uncertainty/normalQuantile'
 import { requireLives, type ObservedLife } from './observedLives'
 
 /** One age at which something came down. */

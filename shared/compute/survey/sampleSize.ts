@@ -1,5 +1,5 @@
 import { ComputeError } from '@/shared/compute/errors'
-import { normalQuantile } from '@/shared/compute/uncertainty/quantiles'
+import { normalQuantile } from '@/shared/compute/uncertainty/normalQuantile'
 
 export interface SampleSize {
   /** Without and with the finite-population correction. */

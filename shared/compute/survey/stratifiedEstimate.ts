@@ -1,6 +1,7 @@
 import { ComputeError } from '@/shared/compute/errors'
 import { sum } from '@/shared/compute/sum'
-import { normalQuantile, studentQuantile } from '@/shared/compute/uncertainty/quantiles'
+import { normalQuantile } from '@/shared/compute/uncertainty/normalQuantile'
+import { studentQuantile } from '@/shared/compute/uncertainty/studentQuantile'
 
 /** A stratum and what its sample showed. */
 export interface SampledStratum {

@@ -4,9 +4,11 @@ import { ComputeError } from '@/shared/compute/errors'
  * Percentile of sorted values by linear interpolation between order statistics.
  *
  * @param sorted ascending, at least one
- * @param probability in [0, 1]
+ * @param probability p [–], in [0, 1]
+ * @returns value between the smallest (p = 0) and the largest (p = 1), in the unit of the values
  * @throws {ComputeError} `empty-input`, `share-out-of-range`
- * @see Hyndman, R. J. & Fan, Y. (1996). The American Statistician 50, 361–365, definition 7.
+ * @see Hyndman, R. J. & Fan, Y. (1996). Sample quantiles in statistical packages. The American Statistician 50,
+ *   361–365, definition 7.
  * @example
  * percentile([1, 2, 3, 4], 0.5) // => 2.5
  */
