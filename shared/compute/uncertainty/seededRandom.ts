@@ -26,33 +26,33 @@ const WARM_UP_ROUNDS = 15
  * seededRandom(7).normal() === seededRandom(7).normal() // => true
  */
 export function seededRandom(seed: number | readonly [number, number, number]): SeededRandom {
-  let [a, b, c] = typeof seed === 'number' ? [seed, SECOND_WORD, THIRD_WORD] : seed
-  if (![a, b, c].every((word) => Number.isInteger(word) && word >= 0 && word < 2 ** 32))
+  const words = typeof seed === 'number' ? [seed, SECOND_WORD, THIRD_WORD] : seed
+  if (!words.every((word) => Number.isInteger(word) && word >= 0 && word < 2 ** 32))
     throw new ComputeError('parameter-out-of-range', { seed })
-  let counter = 1
-  let spare: number | null = null
+  // typed arrays hold whole words; plain variables of a closure would be boxed at every step
+  const state = Int32Array.of(...words, 1)
+  const spare = Float64Array.of(NaN)
   const uniform = (): number => {
-    const mixed = (a + b + counter) | 0
-    counter = (counter + 1) | 0
-    a = b ^ (b >>> 9)
-    b = (c + (c << 3)) | 0
-    c = (((c << 21) | (c >>> 11)) + mixed) | 0
+    const [b, c, counter] = [state[1]!, state[2]!, state[3]!]
+    const mixed = (state[0]! + b + counter) | 0
+    state[3] = counter + 1
+    state[0] = b ^ (b >>> 9)
+    state[1] = c + (c << 3)
+    state[2] = ((c << 21) | (c >>> 11)) + mixed
     return (mixed >>> 0) / 4_294_967_296
   }
   for (let round = 0; round < WARM_UP_ROUNDS; round++) uniform()
   const normal = (): number => {
-    if (spare !== null) {
-      const kept = spare
-      spare = null
-      return kept
-    }
+    const kept = spare[0]!
+    spare[0] = NaN
+    if (!Number.isNaN(kept)) return kept
     for (;;) {
       const x = 2 * uniform() - 1
       const y = 2 * uniform() - 1
       const square = x * x + y * y
       if (square === 0 || square >= 1) continue
       const scale = Math.sqrt((-2 * Math.log(square)) / square)
-      spare = y * scale
+      spare[0] = y * scale
       return x * scale
     }
   }
