@@ -1,24 +1,41 @@
 import type { Change } from '@/shared/schemas/sync'
 import type { Statements } from './driver.types'
-import { writeMeta } from './metaTable'
+import { readMeta, removeMeta, writeMeta } from './metaTable'
 import type { PulledPage } from './syncStore.types'
 
-/** Writes one page of a pull; a page that comes twice changes nothing (L2), rows of other beats go (L5). */
+type BaseTable = 'base' | 'base_next'
+
+/**
+ * Writes one page of a pull; a page that comes twice changes nothing (L2), rows of other beats go (L5). In a rebuild it
+ * is written beside the rows that are there, and its last page takes their place (L7).
+ */
 export async function applyPage(inside: Statements, page: PulledPage): Promise<void> {
   const present = page.changes.filter((change) => change.type !== 'gone')
   const gone = page.changes.filter((change) => change.type === 'gone')
+  const isRebuild = (await readMeta(inside, 'rebuildCursor')) !== null
+  const into: BaseTable = isRebuild ? 'base_next' : 'base'
   await inside.run(
-    `INSERT INTO base (type, id, change_no, building_id, beat_id, fields)
+    `INSERT INTO ${into} (type, id, change_no, building_id, beat_id, fields)
      SELECT value ->> 'type', value ->> 'id', value ->> 'change', value ->> 'buildingId', value ->> 'beatId', value ->> 'fields'
      FROM json_each(?) WHERE true
      ON CONFLICT (type, id) DO UPDATE SET change_no = excluded.change_no, building_id = excluded.building_id,
-       beat_id = excluded.beat_id, fields = excluded.fields WHERE excluded.change_no > base.change_no`,
+       beat_id = excluded.beat_id, fields = excluded.fields WHERE excluded.change_no > ${into}.change_no`,
     [JSON.stringify(present.map(toRow))],
   )
-  if (gone.length > 0) await dropGone(inside, gone)
+  if (gone.length > 0) await dropGone(inside, into, gone)
   await confirmPhotos(inside, present)
-  await dropOtherBeats(inside, page.beatIds)
-  await writeMeta(inside, 'cursor', page.cursor)
+  await dropOtherBeats(inside, 'base', page.beatIds)
+  if (isRebuild) await dropOtherBeats(inside, 'base_next', page.beatIds)
+  await writeMeta(inside, isRebuild ? 'rebuildCursor' : 'cursor', page.cursor)
+  if (isRebuild && page.isLast) await swap(inside, page.cursor)
+}
+
+async function swap(inside: Statements, cursor: string): Promise<void> {
+  await inside.run('DELETE FROM base')
+  await inside.run('INSERT INTO base SELECT * FROM base_next')
+  await inside.run('DELETE FROM base_next')
+  await removeMeta(inside, 'rebuildCursor')
+  await writeMeta(inside, 'cursor', cursor)
 }
 
 function toRow(change: Change) {
@@ -35,7 +52,7 @@ function toRow(change: Change) {
   return { type, id, change: changeNo, ...place, fields: JSON.stringify(fields) }
 }
 
-async function dropGone(inside: Statements, gone: readonly Change[]): Promise<void> {
+async function dropGone(inside: Statements, from: BaseTable, gone: readonly Change[]): Promise<void> {
   const rows = JSON.stringify(
     gone.flatMap((change) => (change.type === 'gone' ? [{ id: change.id, of: change.of, change: change.change }] : [])),
   )
@@ -46,9 +63,9 @@ async function dropGone(inside: Statements, gone: readonly Change[]): Promise<vo
     [rows],
   )
   await inside.run(
-    `DELETE FROM base WHERE (type, id) IN (
+    `DELETE FROM ${from} WHERE (type, id) IN (
        SELECT value ->> 'of', value ->> 'id' FROM json_each(?)
-       JOIN base AS held ON held.type = value ->> 'of' AND held.id = value ->> 'id' AND held.change_no < value ->> 'change')`,
+       JOIN ${from} AS held ON held.type = value ->> 'of' AND held.id = value ->> 'id' AND held.change_no < value ->> 'change')`,
     [rows],
   )
 }
@@ -74,14 +91,14 @@ async function confirmPhotos(inside: Statements, changes: readonly Change[]): Pr
   )
 }
 
-async function dropOtherBeats(inside: Statements, beatIds: readonly string[]): Promise<void> {
+async function dropOtherBeats(inside: Statements, from: BaseTable, beatIds: readonly string[]): Promise<void> {
   const beats = JSON.stringify(beatIds)
-  const others = `SELECT id FROM base WHERE type = 'building' AND beat_id NOT IN (SELECT value FROM json_each(?))`
-  await inside.run(`DELETE FROM base WHERE type IN ('sheet', 'photo', 'conflict') AND building_id IN (${others})`, [
+  const others = `SELECT id FROM ${from} WHERE type = 'building' AND beat_id NOT IN (SELECT value FROM json_each(?))`
+  await inside.run(`DELETE FROM ${from} WHERE type IN ('sheet', 'photo', 'conflict') AND building_id IN (${others})`, [
     beats,
   ])
   await inside.run(
-    `DELETE FROM base WHERE type IN ('beat', 'building') AND beat_id NOT IN (SELECT value FROM json_each(?))`,
+    `DELETE FROM ${from} WHERE type IN ('beat', 'building') AND beat_id NOT IN (SELECT value FROM json_each(?))`,
     [beats],
   )
 }

@@ -8,6 +8,7 @@ async function phoneWithBeat() {
   await phone.sync.applyPage({
     cursor: '2',
     beatIds: [BEAT_ID],
+    isLast: true,
     changes: [
       { type: 'beat', id: BEAT_ID, change: 1, fields: buildBeat() },
       { type: 'building', id: BUILDING_ID, change: 2, fields: buildBuilding(BEAT_ID) },
@@ -54,6 +55,27 @@ describe('createFieldStore', () => {
     expect(await field.readPhotoBytes(photo.sha256)).toEqual(new Uint8Array([1, 2, 3]))
   })
 
+  it('hides a confirmed photo as soon as it is removed, and shows it again when that is refused', async () => {
+    const { field, sync, nextId } = await phoneWithBeat()
+    const photoId = nextId()
+    const meta = { photoId, sheetId: BUILDING_ID, sha256: 'a'.repeat(64), bytes: 3, mime: 'image/jpeg' as const }
+    const fields = { ...meta, widthPx: 4, heightPx: 3, tag: 'rear' as const, takenAt: null, refusal: null }
+    const change = { type: 'photo' as const, id: photoId, change: 5, fields: { ...fields, state: 'stored' as const } }
+    await sync.applyPage({ cursor: '5', beatIds: [BEAT_ID], isLast: true, changes: [change] })
+
+    await field.removePhoto(photoId)
+    await field.removePhoto(photoId)
+
+    expect(await field.listPhotos(BUILDING_ID)).toEqual([])
+    expect((await field.readBuilding(BUILDING_ID))?.photoCount).toBe(0)
+    const [removal, ...more] = await sync.nextBatch(10, 1e6)
+    expect(more).toEqual([])
+    expect(removal?.mutation).toMatchObject({ op: 'delete', entity: photoId, seen: 5 })
+
+    await sync.settle([{ id: removal?.mutationId ?? '', seq: 1, status: 'blocked' }])
+    expect((await field.listPhotos(BUILDING_ID)).map(({ place }) => place)).toEqual(['confirmed'])
+  })
+
   it('leaves the draft untouched when the transaction fails', async () => {
     const { field, driver } = await phoneWithBeat()
     await field.keepDraft(BUILDING_ID, { notes: { text: 'a' } })
@@ -72,6 +94,7 @@ describe('createFieldStore', () => {
     await sync.applyPage({
       cursor: '2',
       beatIds: [BEAT_ID],
+      isLast: true,
       changes: [{ type: 'beat', id: BEAT_ID, change: 1, fields: older }],
     })
 
@@ -85,6 +108,7 @@ describe('createFieldStore', () => {
     await sync.applyPage({
       cursor: '9',
       beatIds: [BEAT_ID],
+      isLast: true,
       changes: [{ type: 'gone', id: BUILDING_ID, change: 9, of: 'sheet' }],
     })
     await field.keepDraft(BUILDING_ID, { notes: { text: 'new' } })

@@ -119,15 +119,20 @@ async function addPhoto(inside: Statements, photo: PhotoMeta, stamp: Stamp): Pro
 }
 
 async function removePhoto(inside: Statements, photoId: string, stamp: Stamp): Promise<void> {
-  const [row] = await inside.all<{ sheet_id: string; change_no: number }>(
-    `SELECT building_id AS sheet_id, change_no FROM base WHERE type = 'photo' AND id = ?
-     UNION ALL SELECT sheet_id, 0 FROM photo WHERE photo_id = ? LIMIT 1`,
-    [photoId, photoId],
+  const [pulled] = await inside.all<BaseRow>("SELECT id, change_no, fields FROM base WHERE type = 'photo' AND id = ?", [
+    photoId,
+  ])
+  const [own] = await inside.all<PhotoRow>('SELECT * FROM photo WHERE photo_id = ?', [photoId])
+  const meta = own ? readColumn.photoMeta(own.meta) : pulled ? readColumn.photoMeta(pulled.fields) : null
+  if (!meta || own?.is_removed === 1) return
+  // a confirmed photo has no row of its own any more; this one hides it until pull says that it is gone
+  await inside.run(
+    `INSERT INTO photo (photo_id, sheet_id, meta, place, is_removed) VALUES (?, ?, ?, 'sent', 1)
+     ON CONFLICT (photo_id) DO UPDATE SET is_removed = 1`,
+    [photoId, meta.sheetId, JSON.stringify(meta)],
   )
-  if (!row) return
-  await inside.run('UPDATE photo SET is_removed = 1 WHERE photo_id = ?', [photoId])
-  const change = { op: 'delete', type: 'photo', entity: photoId, seen: row.change_no } as const
-  await appendMutation(inside, change, row.sheet_id, stamp)
+  const change = { op: 'delete', type: 'photo', entity: photoId, seen: pulled?.change_no ?? 0 } as const
+  await appendMutation(inside, change, meta.sheetId, stamp)
 }
 
 async function readSheet(driver: Driver, buildingId: string): Promise<StoredSheet | null> {
@@ -152,10 +157,7 @@ async function readSheet(driver: Driver, buildingId: string): Promise<StoredShee
 }
 
 async function listPhotos(driver: Driver, sheetId: string): Promise<StoredPhoto[]> {
-  const own = await driver.all<PhotoRow & { is_removed: number }>(
-    'SELECT * FROM photo WHERE sheet_id = ? ORDER BY photo_id',
-    [sheetId],
-  )
+  const own = await driver.all<PhotoRow>('SELECT * FROM photo WHERE sheet_id = ? ORDER BY photo_id', [sheetId])
   const pulled = await driver.all<BaseRow>(
     "SELECT id, change_no, fields FROM base WHERE type = 'photo' AND building_id = ? ORDER BY id",
     [sheetId],

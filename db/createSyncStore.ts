@@ -33,18 +33,22 @@ export function createSyncStore({ driver, photoFiles, now, changed, subscribe }:
       return (await driver.all('SELECT seq FROM outbox WHERE seq = ? AND status IS NULL', [seq])).length > 0
     },
     nextSeq: async () => Number((await readMeta(driver, 'nextSeq')) ?? '1'),
+    beginRenewal: () => driver.transaction((inside) => writeMeta(inside, 'isRenewing', '1')),
+    isRenewing: async () => (await readMeta(driver, 'isRenewing')) !== null,
     renumber: (deviceId) => write((inside) => renumber(inside, deviceId)),
-    readCursor: () => readMeta(driver, 'cursor'),
+    async readCursor() {
+      const ofRebuild = await readMeta(driver, 'rebuildCursor')
+      return ofRebuild === null ? readMeta(driver, 'cursor') : ofRebuild || null
+    },
     applyPage: (page) => write((inside) => applyPage(inside, page)),
     dropConfirmed: (ackSeq, at) => write((inside) => dropConfirmed(inside, ackSeq, at)),
     async baseDigest() {
       return syncDigest(await driver.all<{ id: string; change: number }>('SELECT id, change_no AS change FROM base'))
     },
-    clearBase: () =>
-      write(async (inside) => {
-        await inside.run('DELETE FROM base')
-        await inside.run('DELETE FROM gone_sheet')
-        await removeMeta(inside, 'cursor')
+    startRebuild: () =>
+      driver.transaction(async (inside) => {
+        await inside.run('DELETE FROM base_next')
+        await writeMeta(inside, 'rebuildCursor', '')
       }),
     async nextPhotos(most) {
       const rows = await driver.all<PhotoRow>(
@@ -115,12 +119,25 @@ async function setApart(inside: Statements, mutationId: string, problem: Problem
     [JSON.stringify(problem), now.toISOString(), mutationId],
   )
   await returnToDraft(inside, mutationId, now)
-  await inside.run(
-    `UPDATE photo SET place = 'refused', refusal = ?
-     WHERE photo_id = (SELECT entity_id FROM outbox WHERE mutation_id = ? AND type = 'photo')`,
-    [problem.detail, mutationId],
-  )
+  await refusePhoto(inside, mutationId, problem)
   await inside.run('DELETE FROM outbox WHERE mutation_id = ?', [mutationId])
+}
+
+/** A photo whose record was refused says why; one whose removal was refused is there again. */
+async function refusePhoto(inside: Statements, mutationId: string, problem: Problem): Promise<void> {
+  const entityOf = (op: string) =>
+    `(SELECT entity_id FROM outbox WHERE mutation_id = ? AND type = 'photo' AND payload ->> 'op' = '${op}')`
+  await inside.run(`UPDATE photo SET place = 'refused', refusal = ? WHERE photo_id = ${entityOf('set')}`, [
+    problem.detail,
+    mutationId,
+  ])
+  await inside.run(
+    `DELETE FROM photo WHERE photo_id = ${entityOf('delete')} AND photo_id IN (SELECT id FROM base WHERE type = 'photo')`,
+    [mutationId],
+  )
+  await inside.run(`UPDATE photo SET is_removed = 0 WHERE photo_id = ${entityOf('delete')} AND place <> 'refused'`, [
+    mutationId,
+  ])
 }
 
 /** What was refused opens in the form again, under what was written since, so that it can be mended. */
@@ -133,7 +150,14 @@ async function returnToDraft(inside: Statements, mutationId: string, now: Date):
   const { building_id: buildingId, payload } = refused
   const [draft] = await inside.all<DraftRow>('SELECT * FROM draft WHERE building_id = ?', [buildingId])
   const { set, seen } = JSON.parse(payload) as { set: SheetAnswers; seen: number }
-  const answers = { ...set, ...readColumn.draft(draft?.answers ?? '{}') }
+  const later = await inside.all<{ key: string }>(
+    "SELECT said.key FROM outbox, json_each(payload, '$.set') AS said WHERE outbox.type = 'sheet' AND building_id = ? AND seq > ?",
+    [buildingId, refused.seq],
+  )
+  const answered = new Set(later.map(({ key }) => key))
+  const standing = Object.entries(set).filter(([group]) => !answered.has(group))
+  if (standing.length === 0) return
+  const answers = { ...Object.fromEntries(standing), ...readColumn.draft(draft?.answers ?? '{}') }
   await inside.run(
     `INSERT INTO draft (building_id, answers, seen, kept_at) VALUES (?, ?, ?, ?)
      ON CONFLICT (building_id) DO UPDATE SET answers = excluded.answers`,
@@ -156,6 +180,7 @@ async function renumber(inside: Statements, deviceId: string): Promise<void> {
   }
   await writeMeta(inside, 'nextSeq', String(rows.length + 1))
   await writeMeta(inside, 'deviceId', deviceId)
+  await removeMeta(inside, 'isRenewing')
 }
 
 async function dropConfirmed(inside: Statements, ackSeq: number, at: string): Promise<void> {

@@ -1,6 +1,16 @@
 import type { Statements } from './driver.types'
 
-export type MetaName = 'nextSeq' | 'cursor' | 'edition' | 'lastHandedInAt' | 'scopeEpoch' | 'deviceId'
+export type MetaName =
+  | 'nextSeq'
+  | 'cursor'
+  | 'edition'
+  | 'lastHandedInAt'
+  | 'scopeEpoch'
+  | 'deviceId'
+  /** Set while the pulled rows are fetched anew beside those that are there; its cursor, empty at the start. */
+  | 'rebuildCursor'
+  /** Set from the wish for another device id until the bag is numbered for it. */
+  | 'isRenewing'
 
 export async function readMeta(inside: Statements, name: MetaName): Promise<string | null> {
   const [row] = await inside.all<{ value: string }>('SELECT value FROM meta WHERE name = ?', [name])

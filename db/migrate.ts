@@ -28,6 +28,12 @@ const VERSIONS: readonly (readonly string[])[] = [
     ) WITHOUT ROWID`,
     'CREATE INDEX photo_by_sheet ON photo (sheet_id)',
   ],
+  [
+    `CREATE TABLE base_next (
+      type TEXT NOT NULL, id TEXT NOT NULL, change_no INTEGER NOT NULL, building_id TEXT, beat_id TEXT,
+      fields TEXT NOT NULL, PRIMARY KEY (type, id)
+    ) WITHOUT ROWID`,
+  ],
 ]
 
 /** Brings the database to the newest version, all of it or nothing. */

@@ -9,6 +9,8 @@ const TAKE_OVER = 'take-over'
 
 /** How long another tab is given to let go [ms]. */
 const PATIENCE_MS = 15_000
+/** How long this tab may need to close what it had open for somebody else [ms]. */
+const OWN_PATIENCE_MS = 1_500
 const RETRY_MS = 250
 const MOST_RETRIES = 20
 
@@ -39,8 +41,7 @@ export async function openDatabase(name: string, { takeOver = false, onTaken }: 
       if (data === TAKE_OVER) void yieldTab(driver).then(onTaken)
     }
     const close = async () => {
-      await driver.close()
-      letGo()
+      await driver.close().finally(letGo)
     }
     return { ...driver, close }
   } catch (error) {
@@ -73,18 +74,12 @@ async function openPatiently(name: string): Promise<PlainDatabase> {
 }
 
 /** Resolves with the function that lets the lock go, or null when another tab holds it. */
-function holdLock(waits: boolean): Promise<(() => void) | null> {
+function holdLock(isTakingOver: boolean): Promise<(() => void) | null> {
   if (!('locks' in navigator)) return Promise.resolve(() => undefined)
   return new Promise((resolve, reject) => {
-    const options = waits ? { signal: AbortSignal.timeout(PATIENCE_MS) } : { ifAvailable: true }
+    const signal = AbortSignal.timeout(isTakingOver ? PATIENCE_MS : OWN_PATIENCE_MS)
     navigator.locks
-      .request(LOCK, options, (lock) => {
-        if (!lock) {
-          resolve(null)
-          return undefined
-        }
-        return new Promise<void>((letGo) => resolve(letGo))
-      })
+      .request(LOCK, { signal }, () => new Promise<void>((letGo) => resolve(letGo)))
       .catch((error: unknown) => {
         if (error instanceof DOMException && error.name === 'TimeoutError') resolve(null)
         else reject(error)

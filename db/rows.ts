@@ -34,6 +34,7 @@ export interface PhotoRow {
   readonly meta: string
   readonly place: 'kept-here' | 'sent' | 'refused'
   readonly refusal: string | null
+  readonly is_removed: number
 }
 
 export interface QuarantineRow {

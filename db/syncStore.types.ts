@@ -16,16 +16,20 @@ export interface SyncStore {
   setApart(mutationId: string, problem: Problem): Promise<void>
   hasSeq(seq: number): Promise<boolean>
   nextSeq(): Promise<number>
+  /** Remembers that another device id is wanted, before anybody is asked for it; `renumber` ends it. */
+  beginRenewal(): Promise<void>
+  isRenewing(): Promise<boolean>
   /** Numbers what waits from 1, with the same ids; nothing of it counts as answered any more. */
   renumber(deviceId: string): Promise<void>
+  /** Where pull goes on; null is from the start. */
   readCursor(): Promise<string | null>
-  /** Stores a page, its cursor and its scope together. */
+  /** Stores a page, its cursor and its scope together; the last page of a rebuild takes the place of the rows. */
   applyPage(page: PulledPage): Promise<void>
   /** After the last page: drops from the bag what the snapshot holds and the server answered. */
   dropConfirmed(ackSeq: number, at: string): Promise<void>
   baseDigest(): Promise<SyncDigest>
-  /** Throws the pulled rows away; bag, drafts, quarantine and photos stay. */
-  clearBase(): Promise<void>
+  /** From now on pages are fetched from the start, beside the rows that are there until the last page came. */
+  startRebuild(): Promise<void>
   nextPhotos(most: number): Promise<readonly PhotoMeta[]>
   readPhotoBytes(sha256: string): Promise<Uint8Array | null>
   markPhoto(photoId: string, place: 'sent' | 'refused', refusal: string | null): Promise<void>
@@ -44,4 +48,6 @@ export interface PulledPage {
   readonly changes: readonly Change[]
   readonly cursor: string
   readonly beatIds: readonly string[]
+  /** No page comes after it. */
+  readonly isLast: boolean
 }

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { BUILDING_ID, ForgetfulServer, type Mishap } from '@/tests/support/forgetfulServer'
+import { buildBeat } from '@/tests/support/buildFieldEntities'
+import { BEAT_ID, BUILDING_ID, ForgetfulServer, type Mishap } from '@/tests/support/forgetfulServer'
 import { memoryPhone, type MemoryPhone } from '@/tests/support/memoryPhone'
 import { createHandIn, type RunningHandIn } from './createHandIn'
 
@@ -9,6 +10,7 @@ interface Setting {
   readonly handIn: RunningHandIn
   /** Timers that are set. */
   readonly timers: Set<() => void>
+  readonly deviceId: () => string
 }
 
 async function setting(): Promise<Setting> {
@@ -31,7 +33,7 @@ async function setting(): Promise<Setting> {
     },
   })
   await handIn.handIn()
-  return { phone, server, handIn, timers }
+  return { phone, server, handIn, timers, deviceId: () => deviceId }
 }
 
 async function record(phone: MemoryPhone, aboveGround: number): Promise<void> {
@@ -119,6 +121,19 @@ describe('createHandIn', () => {
     expect(here.server.order).toHaveLength(1)
   })
 
+  it('P6 does not bring a refused answer back over one that was given later', async () => {
+    const here = await setting()
+    await record(here.phone, 1)
+    await record(here.phone, 2)
+    const [first] = (await here.phone.field.readBag()).entries
+    here.server.refused.add(first?.mutationId ?? '')
+
+    await here.handIn.handIn()
+
+    expect((await here.phone.field.readBuilding(BUILDING_ID))?.answers.storeys?.aboveGround).toBe(2)
+    expect((await here.phone.field.readSheet(BUILDING_ID))?.draft).toEqual({})
+  })
+
   it('P6 opens what was refused in the form again, and forgets the refusal when it is put in the bag anew', async () => {
     const here = await setting()
     await record(here.phone, 7)
@@ -159,6 +174,60 @@ describe('createHandIn', () => {
     expect((await here.phone.field.readSheet(BUILDING_ID))?.draft.notes?.text).toBe('rear wing')
   })
 
+  it('L7 keeps the rows that are there until everything was fetched anew', async () => {
+    const here = await setting()
+    here.server.mishaps.push('resync', 'no-answer')
+
+    await here.handIn.handIn()
+    expect(await here.phone.field.listBeats()).toHaveLength(1)
+    await here.handIn.handIn()
+
+    expect(here.handIn.getState().stoppedBecause).toBeNull()
+    expect((await here.phone.sync.baseDigest()).count).toBe(2)
+  })
+
+  it.each<Mishap>(['no-answer', 'answer-lost'])(
+    'P4 ends a change of its device id that broke off when there was %s',
+    async (mishap) => {
+      const here = await setting()
+      await record(here.phone, 3)
+      here.server.mishaps.push('fork', mishap)
+
+      await here.handIn.handIn()
+      expect(here.handIn.getState().stoppedBecause).toBe('no-network')
+      await here.handIn.handIn()
+
+      expect(here.handIn.getState().stoppedBecause).toBeNull()
+      expect(here.server.enrolled.at(-1)).toBe(here.deviceId())
+      expect(new Set(here.server.enrolled).size).toBe(1)
+      expect(here.server.order).toHaveLength(1)
+    },
+  )
+
+  it('P12 pulls although the app is too old to hand in', async () => {
+    const here = await setting()
+    await record(here.phone, 3)
+    here.server.put({ type: 'beat', id: BEAT_ID, change: 0, fields: { ...buildBeat(), name: 'Beat 5' } })
+    here.server.mishaps.push('too-old')
+
+    await here.handIn.handIn()
+
+    expect(here.handIn.getState().stoppedBecause).toBe('upgrade-required')
+    expect((await here.phone.field.listBeats())[0]?.beat.name).toBe('Beat 5')
+    expect((await here.phone.field.readBag()).sheetCount).toBe(1)
+  })
+
+  it('sends nothing more once it is stopped', async () => {
+    const here = await setting()
+    await record(here.phone, 3)
+    here.handIn.stop()
+
+    await here.handIn.handIn()
+
+    expect(here.server.order).toEqual([])
+    expect(here.timers.size).toBe(0)
+  })
+
   it('L7 fetches everything anew when its cursor is too old', async () => {
     const here = await setting()
     here.server.mishaps.push('resync')
@@ -175,7 +244,7 @@ describe('createHandIn', () => {
     here.server.mishaps.push('server-fault')
     await here.handIn.handIn()
 
-    await here.phone.sync.applyPage({ changes: [], cursor: '9', beatIds: [] })
+    await here.phone.sync.applyPage({ changes: [], cursor: '9', beatIds: [], isLast: true })
 
     expect(await here.phone.field.listBeats()).toEqual([])
     expect((await here.phone.field.readBag()).sheetCount).toBe(1)

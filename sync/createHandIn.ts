@@ -1,12 +1,9 @@
-import { readDeviceEdition, renewDevice } from '@/shared/api/sync'
 import type { SyncStore } from '@/db/syncStore.types'
 import type { ApiClient } from './api/createApiClient'
-import { ApiError } from './api/ApiError'
+import { finishRenewal } from './finishRenewal'
 import type { HandIn, HandInState } from './handIn.types'
-import { pullChanges } from './pullChanges'
-import { pushOutbox } from './pushOutbox'
 import { retryDelayMs } from './retryDelayMs'
-import { uploadPhotos } from './uploadPhotos'
+import { syncOnce } from './syncOnce'
 import { needsPerson, whyStopped } from './whyStopped'
 
 export interface HandInParts {
@@ -24,11 +21,13 @@ export interface HandInParts {
 }
 
 export interface RunningHandIn extends HandIn {
-  /** No more tries by itself. */
+  /** Breaks off, and tries no more. */
   stop(): void
 }
 
 const POLL_MS = 60_000
+/** A new edition of the factor book is rare. */
+const EDITION_MS = 3_600_000
 const RESTING: HandInState = {
   phase: 'resting',
   done: 0,
@@ -39,48 +38,37 @@ const RESTING: HandInState = {
   nextTryAt: null,
 }
 
-/** Push, pull, photos, then push's echo; one at a time, and tried again by itself as long as anything waits. */
+/** Push, pull, photos; one at a time, and tried again by itself as long as anything waits. */
 export function createHandIn(parts: HandInParts): RunningHandIn {
   const { store, api, deviceId, now, random, later } = parts
   const listeners = new Set<() => void>()
   let state = RESTING
   let running: Promise<void> | null = null
   let failures = 0
-  let isStopped = false
+  let editionDueMs = 0
+  const stopping = new AbortController()
   let cancelTimer = () => {}
 
   const setState = (next: Partial<HandInState>) => {
     state = { ...state, ...next }
     listeners.forEach((listener) => listener())
   }
-  const progressOf = (phase: HandInState['phase']) => (done: number, total: number) => setState({ phase, done, total })
   const enrolAnew = async () => {
-    const renewed = parts.renewDeviceId()
-    const session = await api.call(renewDevice, { body: { deviceId: renewed, name: parts.deviceName } })
-    parts.adoptToken(session.accessToken)
-    await store.renumber(renewed)
-  }
-  const shared = { store, api, deviceId, enrolAnew, now }
-  const pull = () => pullChanges({ ...shared, onProgress: progressOf('fetching') })
-  const fetchEdition = async () => {
-    try {
-      await store.keepEdition(await api.call(readDeviceEdition))
-    } catch (error) {
-      // no edition is issued yet: the sheets need none
-      if (!(error instanceof ApiError) || error.status !== 404) throw error
-    }
+    // the wish first: whatever breaks off after it is ended by the next run
+    await store.beginRenewal()
+    parts.renewDeviceId()
+    await finishRenewal(parts, stopping.signal)
   }
   const work = async () => {
-    await pushOutbox({ ...shared, onProgress: progressOf('sending') })
-    await pull()
-    const { photos } = await store.countWaiting()
-    await uploadPhotos({ store, api, onProgress: progressOf('sending-photos') })
-    if (photos > 0) await pull()
-    await fetchEdition()
+    await finishRenewal(parts, stopping.signal)
+    const isEditionDue = now().getTime() >= editionDueMs
+    const onProgress = (phase: HandInState['phase'], done: number, total: number) => setState({ phase, done, total })
+    await syncOnce({ store, api, deviceId, enrolAnew, now, isEditionDue, onProgress }, stopping.signal)
+    if (isEditionDue) editionDueMs = now().getTime() + EDITION_MS
   }
   const plan = (delayMs: number) => {
     cancelTimer()
-    if (isStopped) return
+    if (stopping.signal.aborted) return
     cancelTimer = later(() => void handIn(), delayMs)
     setState({ nextTryAt: new Date(now().getTime() + delayMs).toISOString() })
   }
@@ -93,6 +81,7 @@ export function createHandIn(parts: HandInParts): RunningHandIn {
       setState({ phase: 'resting', network: 'reached', lastSyncedAt: now().toISOString() })
       plan(POLL_MS * (0.8 + 0.4 * random()))
     } catch (error) {
+      if (stopping.signal.aborted) return
       failures += 1
       const stoppedBecause = whyStopped(error)
       const network = stoppedBecause === 'no-network' ? 'not-reached' : 'reached'
@@ -102,6 +91,7 @@ export function createHandIn(parts: HandInParts): RunningHandIn {
     }
   }
   const handIn = (): Promise<void> => {
+    if (stopping.signal.aborted) return Promise.resolve()
     running ??= run().finally(() => {
       running = null
     })
@@ -115,7 +105,8 @@ export function createHandIn(parts: HandInParts): RunningHandIn {
     },
     handIn,
     stop() {
-      isStopped = true
+      // what is on its way may belong to somebody who has signed out
+      stopping.abort()
       cancelTimer()
     },
   }

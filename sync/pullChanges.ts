@@ -23,7 +23,7 @@ export interface PullParts {
  */
 export async function pullChanges(parts: PullParts, signal?: AbortSignal): Promise<void> {
   if (await pullOnce(parts, signal)) return
-  await parts.store.clearBase()
+  await parts.store.startRebuild()
   if (!(await pullOnce(parts, signal))) throw new Error('the rows differ from the server after a rebuild')
 }
 
@@ -33,10 +33,11 @@ async function pullOnce(parts: PullParts, signal?: AbortSignal): Promise<boolean
   let fetched = 0
   for (;;) {
     const page = await readPage(parts, signal)
-    await store.applyPage({ changes: page.changes, cursor: page.cursor, beatIds: page.scope.beatIds })
-    fetched += page.changes.length
+    const { changes, cursor, more, scope } = page
+    await store.applyPage({ changes, cursor, beatIds: scope.beatIds, isLast: !more })
+    fetched += changes.length
     onProgress(fetched, fetched)
-    if (page.more) continue
+    if (more) continue
     if (page.ackSeq >= (await store.nextSeq())) {
       await parts.enrolAnew()
       return true
@@ -59,7 +60,7 @@ async function readPage({ store, api, deviceId }: PullParts, signal?: AbortSigna
   } catch (error) {
     const isStale = error instanceof ApiError && ['resync-required', 'cursor-not-usable'].includes(error.code)
     if (!isStale) throw error
-    await store.clearBase()
+    await store.startRebuild()
     return ask()
   }
 }

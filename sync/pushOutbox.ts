@@ -6,6 +6,7 @@ import { ApiError } from './api/ApiError'
 import type { ApiClient } from './api/createApiClient'
 
 const MOST_BYTES = 900_000
+const MOST_ENROLMENTS = 3
 
 export interface PushParts {
   readonly store: SyncStore
@@ -28,6 +29,12 @@ export async function pushOutbox(parts: PushParts, signal?: AbortSignal): Promis
   const { unanswered: total } = await store.countWaiting()
   let done = 0
   let mostCount = PUSH_LIMIT
+  let enrolments = 0
+  const enrolAnew = async () => {
+    // a server that knows no number of any id must not be asked for ever
+    if ((enrolments += 1) > MOST_ENROLMENTS) throw new Error('the numbers of the bag are refused under every device id')
+    await parts.enrolAnew()
+  }
   for (;;) {
     const batch = await store.nextBatch(mostCount, MOST_BYTES)
     if (batch.length === 0) return
@@ -36,7 +43,7 @@ export async function pushOutbox(parts: PushParts, signal?: AbortSignal): Promis
       await pushBatch(parts, batch, signal)
       done += batch.length
     } catch (error) {
-      mostCount = await afterRefusal(parts, batch, error)
+      mostCount = await afterRefusal({ ...parts, enrolAnew }, batch, error)
     }
   }
 }

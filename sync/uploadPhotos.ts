@@ -14,21 +14,31 @@ export interface UploadParts {
 
 /**
  * Sends the photos whose record was handed in, in pieces that go on where they broke off (U2, U3).
- * A photo that is refused is marked with the reason; the others go on.
+ * A photo that is refused is marked with the reason; one that fails waits for the next time; the others go on.
  *
+ * @throws {ApiError} of the first photo that failed, after the others were sent
  * @throws {UnreachableError} no answer
  */
 export async function uploadPhotos(parts: UploadParts, signal?: AbortSignal): Promise<void> {
   const { store, onProgress } = parts
   const { photos: total } = await store.countWaiting()
+  const failed = new Map<string, ApiError>()
   let done = 0
   for (;;) {
-    const [photo] = await store.nextPhotos(1)
-    if (!photo) return
+    const waiting = await store.nextPhotos(failed.size + 1)
+    const photo = waiting.find(({ photoId }) => !failed.has(photoId))
+    if (!photo) break
     onProgress(done, Math.max(total, done + 1))
-    await uploadOne(parts, photo, signal)
+    try {
+      await uploadOne(parts, photo, signal)
+    } catch (error) {
+      if (!isOfThisPhoto(error)) throw error
+      failed.set(photo.photoId, error)
+    }
     done += 1
   }
+  const [first] = failed.values()
+  if (first) throw first
 }
 
 async function uploadOne({ store, api }: UploadParts, photo: PhotoMeta, signal?: AbortSignal): Promise<void> {
@@ -44,6 +54,11 @@ async function uploadOne({ store, api }: UploadParts, photo: PhotoMeta, signal?:
     if (!(error instanceof ApiError) || !isFinal(error)) throw error
     await store.markPhoto(photo.photoId, 'refused', error.problem.detail)
   }
+}
+
+/** Others may well be taken where this one was not. */
+function isOfThisPhoto(error: unknown): error is ApiError {
+  return error instanceof ApiError && [409, 422, 500].includes(error.status)
 }
 
 /** Asking again would bring the same answer. */

@@ -11,7 +11,8 @@ export const BEAT_ID = '01980000-0000-7000-8000-0000000000b1'
 export const BUILDING_ID = '01980000-0000-7000-8000-0000000000a1'
 
 /** What goes wrong next; each is used up by one call. */
-export type Mishap = 'no-answer' | 'answer-lost' | 'server-fault' | 'too-large' | 'resync' | 'sign-in'
+export type Mishap =
+  'no-answer' | 'answer-lost' | 'server-fault' | 'too-large' | 'resync' | 'sign-in' | 'too-old' | 'fork'
 
 /** A server in memory that keeps what it judged and can be told to lose answers. */
 export class ForgetfulServer {
@@ -21,6 +22,8 @@ export class ForgetfulServer {
   /** Ids that it refuses, with a problem. */
   readonly refused = new Set<string>()
   readonly batchSizes: number[] = []
+  /** Device ids that asked to go on, in their order. */
+  readonly enrolled: string[] = []
   /** Breaks the digest of so many last pages. */
   wrongDigests = 0
   beatIds: readonly string[] = [BEAT_ID]
@@ -44,6 +47,8 @@ export class ForgetfulServer {
       if (mishap === 'server-fault') throw refusal(500, 'server-fault')
       if (mishap === 'sign-in') throw refusal(401, 'sign-in-again')
       if (mishap === 'too-large') throw refusal(413, 'too-large')
+      if (mishap === 'too-old') throw refusal(426, 'upgrade-required')
+      if (mishap === 'fork') throw refusal(409, 'sequence-fork')
       if (mishap === 'resync') throw refusal(410, 'resync-required')
       const reply = this.answer(endpoint, input)
       if (mishap === 'answer-lost') throw new UnreachableError('the answer was lost')
@@ -57,6 +62,7 @@ export class ForgetfulServer {
   private answer(endpoint: Endpoint, input: CallInput<Endpoint>): unknown {
     if (endpoint.path === pushMutations.path) return this.push(pushMutations.body.parse(input.body))
     if (endpoint.path === pullChanges.path) return this.pull(pullChanges.query.parse(input.query))
+    if (endpoint.path === renewDevice.path) this.enrolled.push(renewDevice.body.parse(input.body).deviceId)
     if (endpoint.path === renewDevice.path) return { accessToken: 'renewed', expiresInS: 600 }
     if (endpoint.path === readDeviceEdition.path) throw refusal(404, 'not-found')
     throw new UnreachableError(`${endpoint.path} is not served here`)

@@ -65,7 +65,7 @@ export class RealPhone {
       subscribe: () => () => {},
     })
     // A rebuild would hide that the rows had come to differ.
-    return { ...store, clearBase: () => Promise.reject(new Error('the rows differ from the server')) }
+    return { ...store, startRebuild: () => Promise.reject(new Error('the rows differ from the server')) }
   }
 
   base(type: string): Promise<BaseRow[]> {
