@@ -39,6 +39,7 @@ export function SideFrame({ role, children }: SideFrameProps) {
       onNavigate={(href) => router.navigate(href as Href)}
       place={`${account.organisationName} · ${t(SIDE[role])}`}
       foot={<FrameFoot />}
+      hasFootOnPhone
       strip={account.isDemo ? <DemoStrip /> : undefined}
     >
       {children}

@@ -85,12 +85,13 @@ function SideColumn({ entries, currentPath, onNavigate, place, foot }: AppFrameP
   )
 }
 
-function TabBar({ entries, currentPath, onNavigate }: AppFrameProps) {
+function TabBar({ entries, currentPath, onNavigate, foot, hasFootOnPhone = false }: AppFrameProps) {
   const { colours } = useTheme()
   const { t } = useMessages()
   const [isMoreOpen, setIsMoreOpen] = useState(false)
   const current = currentEntry(entries, currentPath)
-  const fits = entries.length <= MOST_TABS
+  const fits = entries.length + (hasFootOnPhone ? 1 : 0) <= MOST_TABS
+  const hasMore = !fits || hasFootOnPhone
   const tabs = fits ? entries : entries.slice(0, MOST_TABS - 1)
   const isBehindMore = current !== undefined && !tabs.includes(current)
   const more: NavEntry = { href: '#more', label: t('common.more'), icon: 'list' }
@@ -107,7 +108,7 @@ function TabBar({ entries, currentPath, onNavigate }: AppFrameProps) {
       {tabs.map((entry) => (
         <TabLink key={entry.href} entry={entry} isCurrent={entry === current} onNavigate={onNavigate} />
       ))}
-      {fits ? null : <TabLink entry={more} isCurrent={isBehindMore} onNavigate={() => setIsMoreOpen(true)} />}
+      {hasMore ? <TabLink entry={more} isCurrent={isBehindMore} onNavigate={() => setIsMoreOpen(true)} /> : null}
       <Dialog title={t('common.product')} isOpen={isMoreOpen} onClose={() => setIsMoreOpen(false)}>
         <Groups entries={entries}>
           {(entry) => (
@@ -122,6 +123,7 @@ function TabBar({ entries, currentPath, onNavigate }: AppFrameProps) {
             />
           )}
         </Groups>
+        {hasFootOnPhone ? foot : null}
       </Dialog>
     </View>
   )

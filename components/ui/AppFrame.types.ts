@@ -21,6 +21,8 @@ export interface AppFrameProps {
   readonly place?: string
   /** At the foot of the side column: who is signed in, the state of the network. */
   readonly foot?: ReactNode
+  /** The foot also lies behind "More" on a phone, for sides without a screen of their own for it. */
+  readonly hasFootOnPhone?: boolean
   /** Across the top of every screen: "Invented demo …". */
   readonly strip?: ReactNode
   readonly children: ReactNode

@@ -57,6 +57,26 @@ describe('AppFrame', () => {
     expect(screen.getByRole('link', { name: 'today' }).getAttribute('aria-current')).toBeNull()
   })
 
+  it('keeps the foot behind "More" on a phone where it is asked for', () => {
+    setWidth(390)
+    render(
+      <AppFrame
+        entries={entries.slice(0, 1)}
+        currentPath="/today"
+        onNavigate={() => {}}
+        foot={<AppText>the way out</AppText>}
+        hasFootOnPhone
+      >
+        <></>
+      </AppFrame>,
+    )
+    expect(screen.queryByText('the way out')).toBeNull()
+
+    fireEvent.click(screen.getByRole('link', { name: 'More' }))
+
+    expect(screen.getByText('the way out')).toBeTruthy()
+  })
+
   it('leads the keyboard past the navigation', () => {
     render(
       <AppFrame entries={entries} currentPath="/today" onNavigate={() => {}}>

@@ -1,11 +1,9 @@
 import type { DistrictComputation } from '@/shared/compute/run/computeDistrict'
 import type { VarianceByCause } from '@/shared/compute/run/run.types'
 import { sharesOfVariance } from '@/shared/compute/run/stockOfCells'
+import { PLAUSIBLE_DEMOLITION_RATE } from '@/shared/compute/stock/impliedDemolitionRate'
 import type { RunBasis } from '@/shared/schemas/run'
 import type { RunInputs, RunSheet } from './runInputs.types'
-
-/** Band of yearly demolition rates that are seen in practice [1/yr]; outside it the lifetimes want a second look. */
-const USUAL_RATE = { least: 0.001, most: 0.01 } as const
 
 /** What a reader must be told beside every figure of a run. */
 export function presentBasis({ frame, sheets }: RunInputs, { stock, yearsAhead }: DistrictComputation): RunBasis {
@@ -33,7 +31,12 @@ export function presentBasis({ frame, sheets }: RunInputs, { stock, yearsAhead }
     unknownStoreysCount: count(({ isStoreysKnown }) => !isStoreysKnown),
     overdueCount: Math.round(yearsAhead.overdueBuildings),
     impliedDemolitionRatePerYear: rate,
-    impliedRateWarning: rate < USUAL_RATE.least ? 'below-band' : rate > USUAL_RATE.most ? 'above-band' : null,
+    impliedRateWarning:
+      rate < PLAUSIBLE_DEMOLITION_RATE.least
+        ? 'below-band'
+        : rate > PLAUSIBLE_DEMOLITION_RATE.most
+          ? 'above-band'
+          : null,
     varianceSharesOfStock: sharesOfVariance(stock.total.varianceByCauseKg2),
     varianceSharesOfTenYearFlow: sharesOfVariance(tenYears),
   }

@@ -1,7 +1,6 @@
 import { ComputeError } from '@/shared/compute/errors'
-
-/** z of the tenth and ninetieth percentile of the standard normal distribution. */
-const Z_90 = 1.2815515655446004
+import { lognormalBand } from '@/shared/compute/uncertainty/lognormalBand'
+import { lognormalFromMean } from '@/shared/compute/uncertainty/lognormalFromMean'
 
 export interface MassBand {
   readonly meanKg: number
@@ -27,7 +26,6 @@ export interface MassBand {
 export function massBand(meanKg: number, varianceKg2: number): MassBand {
   if (!(meanKg >= 0) || !(varianceKg2 >= 0)) throw new ComputeError('negative-amount', { meanKg, varianceKg2 })
   if (meanKg === 0) return { meanKg: 0, p10Kg: 0, p50Kg: 0, p90Kg: 0 }
-  const sigma = Math.sqrt(Math.log1p(varianceKg2 / meanKg ** 2))
-  const p50Kg = meanKg * Math.exp((-sigma * sigma) / 2)
-  return { meanKg, p10Kg: p50Kg * Math.exp(-Z_90 * sigma), p50Kg, p90Kg: p50Kg * Math.exp(Z_90 * sigma) }
+  const { p10, p50, p90 } = lognormalBand(lognormalFromMean(meanKg, Math.sqrt(varianceKg2) / meanKg))
+  return { meanKg, p10Kg: p10, p50Kg: p50, p90Kg: p90 }
 }
