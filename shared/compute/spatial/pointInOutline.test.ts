@@ -32,7 +32,7 @@ it('is outside in a courtyard and inside in the wing', () => {
   expect(pointInOutline([7, 3], withCourtyard)).toBe(false)
 })
 
-it('gives a position on a shared side to exactly one neighbour', () => {
+it('gives a position on a shared side, off its corners, to exactly one neighbour', () => {
   const coordinate = fc.integer({ min: -50, max: 50 }).map((step) => step / 7)
   const position = fc.tuple(coordinate, coordinate)
   fc.assert(
@@ -41,7 +41,7 @@ it('gives a position on a shared side to exactly one neighbour', () => {
       position,
       position,
       position,
-      fc.double({ min: 0, max: 1, noNaN: true }),
+      fc.double({ min: 1e-9, max: 1 - 1e-9, noNaN: true }),
       (a, b, c, d, share) => {
         const cross = (p: Position, q: Position, r: Position) =>
           (q[0] - p[0]) * (r[1] - p[1]) - (q[1] - p[1]) * (r[0] - p[0])
@@ -49,10 +49,9 @@ it('gives a position on a shared side to exactly one neighbour', () => {
         const onSide: Position = [a[0] + share * (b[0] - a[0]), a[1] + share * (b[1] - a[1])]
         const isInFirst = pointInRing(onSide, [a, b, c, a])
         const isInSecond = pointInRing(onSide, [b, a, d, b])
-        const isAtEnd = share < 1e-9 || share > 1 - 1e-9
 
         expect(isInFirst && isInSecond).toBe(false)
-        expect(isAtEnd || isInFirst || isInSecond || onSide[1] === Math.max(a[1], b[1])).toBe(true)
+        expect(isInFirst || isInSecond || onSide[1] === Math.max(a[1], b[1])).toBe(true)
       },
     ),
   )

@@ -7,6 +7,8 @@ import type { Position, Ring } from './spatial.types'
  * @param position tested position [°]
  * @param ring closed or open, not across the 180° meridian
  * @returns true inside; on the boundary true for one of the neighbours
+ * @remarks Within rounding of a corner, sides that are not shared decide as well: there a position may lie in both rings
+ *   or in neither. Buildings are counted by an interior point, which is no corner.
  * @see Shimrat, M. (1962). Algorithm 112: position of point relative to polygon. Communications of the ACM 5, 434.
  * @example
  * pointInRing([0.5, 0.5], [[0, 0], [1, 0], [1, 1], [0, 1], [0, 0]]) // => true
