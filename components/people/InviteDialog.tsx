@@ -39,6 +39,7 @@ export function InviteDialog({ onClose }: { readonly onClose: () => void }) {
       onClose={onClose}
       actions={
         <Button
+          kind="primary"
           label={t('people.sendInvitation')}
           onPress={() => invite.mutate()}
           busy={invite.isPending}

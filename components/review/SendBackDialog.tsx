@@ -34,6 +34,7 @@ export function SendBackDialog({ sheet, onClose, onSent }: SendBackDialogProps) 
       onClose={onClose}
       actions={
         <Button
+          kind="primary"
           label={t('review.sendBack')}
           onPress={() => send.mutate()}
           busy={send.isPending}

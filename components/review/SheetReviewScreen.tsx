@@ -3,9 +3,11 @@ import { useLocalSearchParams, useRouter, type Href } from 'expo-router'
 import { useEffect, useState } from 'react'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { Button } from '@/components/ui/Button'
+import { IconButton } from '@/components/ui/IconButton'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Progress } from '@/components/ui/Progress'
 import { Screen } from '@/components/ui/Screen'
+import { useWide } from '@/components/ui/theme/useWide'
 import { useToast } from '@/components/ui/Toast'
 import { checkSheets, type ReviewSheet } from '@/shared/api/review'
 import { useApi } from '@/sync/react/SessionProvider'
@@ -55,6 +57,7 @@ function ReviewActions({ sheet, onNext, onPrevious }: ReviewActionsProps) {
   const api = useApi()
   const toast = useToast()
   const queries = useQueryClient()
+  const isWide = useWide()
   const [isAsking, setAsking] = useState(false)
   const settle = async () => {
     await queries.invalidateQueries({ queryKey: reviewKeys.all })
@@ -84,10 +87,21 @@ function ReviewActions({ sheet, onNext, onPrevious }: ReviewActionsProps) {
   return (
     <>
       {accept.error ? <ProblemNotice error={accept.error} isSending /> : null}
-      <Button kind="quiet" label={t('review.previous')} onPress={onPrevious} />
-      <Button kind="secondary" label={t('review.sendBack')} onPress={() => setAsking(true)} grow />
-      <Button label={t('review.accept')} onPress={() => accept.mutate()} busy={accept.isPending} grow />
-      <Button kind="quiet" label={t('review.next')} onPress={onNext} />
+      <IconButton icon="back" label={t('review.previous')} onPress={onPrevious} framed />
+      <Button
+        kind="secondary"
+        label={isWide ? t('review.sendBackKey') : t('review.sendBack')}
+        onPress={() => setAsking(true)}
+        grow
+      />
+      <Button
+        kind="primary"
+        label={isWide ? t('review.acceptKey') : t('review.accept')}
+        onPress={() => accept.mutate()}
+        busy={accept.isPending}
+        grow
+      />
+      <IconButton icon="forward" label={t('review.next')} onPress={onNext} framed />
       {isAsking ? <SendBackDialog sheet={sheet} onClose={() => setAsking(false)} onSent={() => void settle()} /> : null}
     </>
   )

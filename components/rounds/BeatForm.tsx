@@ -64,6 +64,7 @@ export function BeatForm({ round, edited, selectedIds, onSelectFree, onClear, on
       {save.error ? <ProblemNotice error={save.error} isSending /> : null}
       <View style={styles.row}>
         <Button
+          kind="primary"
           label={edited ? t('rounds.keepBeat') : t('rounds.makeBeat')}
           onPress={() => save.mutate()}
           busy={save.isPending}

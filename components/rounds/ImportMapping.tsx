@@ -117,6 +117,7 @@ export function ImportMapping({ staged, onDone, onDiscard }: ImportMappingProps)
         ) : null}
         {take.error ? <ProblemNotice error={take.error} isSending /> : null}
         <Button
+          kind="primary"
           label={t('rounds.importNow', { count: staged.usableCount })}
           onPress={() => take.mutate()}
           busy={take.isPending}

@@ -53,7 +53,7 @@ export function NewRoundDialog({ districts, onClose }: NewRoundDialogProps) {
       title={t('rounds.newRound')}
       isOpen
       onClose={onClose}
-      actions={<Button label={t('rounds.openIt')} onPress={handleMake} busy={make.isPending} />}
+      actions={<Button kind="primary" label={t('rounds.openIt')} onPress={handleMake} busy={make.isPending} />}
     >
       <TextField label={t('rounds.name')} value={name} onChange={setName} error={shown(faults.name)} />
       <Select

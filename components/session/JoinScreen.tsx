@@ -74,7 +74,7 @@ function Accept({
         autoComplete="new-password"
       />
       {error ? <SessionFault error={error} /> : null}
-      <Button label={t('auth.join')} onPress={() => void handleJoin()} />
+      <Button kind="primary" label={t('auth.join')} onPress={() => void handleJoin()} />
     </>
   )
 }

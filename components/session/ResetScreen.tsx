@@ -42,7 +42,7 @@ function AskLink() {
       />
       {isSent ? <Notice tone="good" whatHappened={t('auth.linkSent')} /> : null}
       {error ? <SessionFault error={error} /> : null}
-      <Button label={t('auth.sendLink')} onPress={() => void handleAsk()} />
+      <Button kind="primary" label={t('auth.sendLink')} onPress={() => void handleAsk()} />
       <Button kind="quiet" label={t('auth.backToSignIn')} onPress={() => router.navigate('/sign-in')} />
     </>
   )
@@ -67,7 +67,7 @@ function NewPassword({ token }: { readonly token: string }) {
         autoComplete="new-password"
       />
       {error ? <SessionFault error={error} /> : null}
-      <Button label={t('auth.setPassword')} onPress={() => void handleSet()} />
+      <Button kind="primary" label={t('auth.setPassword')} onPress={() => void handleSet()} />
     </>
   )
 }

@@ -52,7 +52,7 @@ export function SignInScreen() {
           onSubmit={() => void handleSignIn()}
         />
         {error ? <SessionFault error={error} /> : null}
-        <Button label={t('auth.signIn')} onPress={() => void handleSignIn()} busy={isBusy} />
+        <Button kind="primary" label={t('auth.signIn')} onPress={() => void handleSignIn()} busy={isBusy} />
         <Button kind="quiet" label={t('auth.forgotten')} onPress={() => router.navigate('/reset')} />
       </Panel>
     </Screen>

@@ -7,7 +7,13 @@ import { sharedFactorStock } from './sharedFactorStock'
 import { varianceByCause, type CausesOfVariance } from './varianceByCause'
 
 const area = fc.double({ min: 0.1, max: 1e4, noNaN: true })
-const cv = fc.double({ min: 0, max: 1, noNaN: true })
+/** Nothing at all, or an amount that somebody could have measured: squares of 1e-200 are zero and test rounding only. */
+const noneOrFrom = (least: number, most: number) =>
+  fc.oneof(
+    { weight: 1, arbitrary: fc.constant(0) },
+    { weight: 9, arbitrary: fc.double({ min: least, max: most, noNaN: true }) },
+  )
+const cv = noneOrFrom(1e-6, 1)
 const areas = fc.array(area, { minLength: 1, maxLength: 80, size: 'max' })
 const factorGroup: fc.Arbitrary<FactorGroup> = fc.record({
   factorMeanKgPerM2: fc.double({ min: 1, max: 2000, noNaN: true }),
@@ -20,11 +26,11 @@ const factorGroups = fc.array(factorGroup, { minLength: 1, maxLength: 8, size: '
 /** A group whose factor is one of four, whose buildings may come down by one of three lives. */
 const massGroup: fc.Arbitrary<MassGroup> = fc
   .record({
-    factors: fc.array(fc.record({ which: fc.nat(3), mean: fc.double({ min: 0, max: 900, noNaN: true }) }), {
+    factors: fc.array(fc.record({ which: fc.nat(3), mean: noneOrFrom(1e-3, 900) }), {
       minLength: 1,
       maxLength: 4,
     }),
-    buildings: fc.array(fc.tuple(area, cv, fc.double({ min: 0, max: 0.5, noNaN: true })), {
+    buildings: fc.array(fc.tuple(area, cv, noneOrFrom(1e-9, 0.5)), {
       minLength: 1,
       maxLength: 40,
       size: 'max',
