@@ -64,7 +64,10 @@ function labelOf({ street, house_number, reference, sheet_id }: SheetRow): strin
   return [street, house_number].filter(Boolean).join(' ') || (reference ?? sheet_id.slice(0, 8))
 }
 
-/** How the frame of a round stands: what is outstanding is counted here and never as zero mass. */
+/**
+ * How the frame of a round stands: what is outstanding is counted here and never as zero mass. Areas are added as exact
+ * decimals, because a sum of doubles depends on the order the database reads its rows in, and equal inputs must be equal.
+ */
 export async function readFrameCounts(scope: Scope, roundId: string): Promise<FrameCounts> {
   const [row] = await scope.select<FrameCounts>(
     `SELECT count(*)::integer AS "frameCount",
@@ -72,7 +75,7 @@ export async function readFrameCounts(scope: Scope, roundId: string): Promise<Fr
             (count(*) FILTER (WHERE s.finding = 'not-a-building'))::integer AS "notABuildingCount",
             (count(*) FILTER (WHERE s.finding = 'cleared'))::integer AS "clearedCount",
             (count(*) FILTER (WHERE s.sheet_id IS NULL))::integer AS "outstandingCount",
-            coalesce(sum(o.footprint_m2) FILTER (WHERE s.finding IS NULL OR s.finding NOT IN ('cleared', 'not-a-building')), 0) AS "frameFootprintM2"
+            coalesce(sum(o.footprint_m2::numeric) FILTER (WHERE s.finding IS NULL OR s.finding NOT IN ('cleared', 'not-a-building')), 0)::double precision AS "frameFootprintM2"
      FROM round_building b
      JOIN outline o ON o.organisation_id = b.organisation_id AND o.outline_id = b.outline_id
      LEFT JOIN sheet s ON s.organisation_id = b.organisation_id AND s.sheet_id = b.building_id AND s.state = 'checked' AND s.deleted_at IS NULL
