@@ -3,6 +3,7 @@ import { defineConfig } from 'vitest/config'
 
 const root = import.meta.dirname
 const alias = { '@': root }
+const propertySeed = path.join(root, 'tests/support/propertySeed.ts')
 /** A component test renders React Native through react-native-web in jsdom. */
 const web = {
   resolve: {
@@ -23,6 +24,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: 'unit',
+          setupFiles: [propertySeed],
           environment: 'node',
           include: [
             'shared/**/*.test.ts',
@@ -38,6 +40,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: 'server',
+          setupFiles: [propertySeed],
           environment: 'node',
           include: ['server/**/*.test.ts', 'tests/sync/**/*.test.ts', 'tests/server/**/*.test.ts'],
           globalSetup: [path.join(root, 'tests/support/testDatabase.global.ts')],
