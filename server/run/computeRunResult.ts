@@ -1,12 +1,13 @@
+import type { Material } from '@/shared/compute/factors/vocabulary'
 import { computeDistrict, massOfBuilding, type DistrictComputation } from '@/shared/compute/run/computeDistrict'
 import type { LifetimeFigure } from '@/shared/compute/run/resolveArchetype'
 import type { EditionRows } from '@/shared/schemas/factorBook'
 import type { RunBuilding, RunResult, Scenario } from '@/shared/schemas/run'
-import { hazardMultiplierOf } from './hazardMultiplierOf'
 import { presentBasis } from './presentBasis'
 import { presentStock } from './presentStock'
 import { presentYearsAhead } from './presentYearsAhead'
 import type { RunInputs } from './runInputs.types'
+import { sliceBuildings, type SlicedBuildings } from './sliceBuildings'
 
 export interface ComputedRun {
   readonly result: RunResult
@@ -19,8 +20,8 @@ export function computeRunResult(
   edition: Pick<EditionRows, 'intensities' | 'lifetimes'>,
 ): ComputedRun {
   const { scenario, surveyYear, sheets } = inputs
-  const buildings = sheets.map((sheet) => ({ ...sheet, hazardMultiplier: hazardMultiplierOf(sheet, scenario) }))
-  const district = computeDistrict(buildings, edition.intensities, withOverrides(edition.lifetimes, scenario), {
+  const sliced = sliceBuildings(sheets, scenario)
+  const district = computeDistrict(sliced.buildings, edition.intensities, withOverrides(edition.lifetimes, scenario), {
     surveyYear,
     horizonYears: scenario.horizonYears,
     yearOffset: scenario.yearOffset,
@@ -28,10 +29,10 @@ export function computeRunResult(
   return {
     result: {
       basis: presentBasis(inputs, district),
-      stock: presentStock(inputs, district, edition.intensities),
+      stock: presentStock(district, edition.intensities),
       yearsAhead: presentYearsAhead(inputs, district),
     },
-    buildings: presentBuildings(inputs, district),
+    buildings: presentBuildings(inputs, sliced, district),
   }
 }
 
@@ -47,13 +48,15 @@ function withOverrides(lifetimes: readonly LifetimeFigure[], { lifetimeOverrides
 
 function presentBuildings(
   { sheets, scenario }: RunInputs,
+  { placesOf }: SlicedBuildings,
   { cells, archetypes, chances }: DistrictComputation,
 ): RunBuilding[] {
   const last = scenario.horizonYears - 1
   return sheets.map((sheet, index): RunBuilding => {
-    const cell = cells[index]!
-    const masses = massOfBuilding(cell, archetypes[cell.archetype]!)
-    const soFar = chances.comingDown(cell).givenSoFar
+    const slices = cells.slice(...placesOf[index]!)
+    const masses = addUp(slices.map((cell) => massOfBuilding(cell, archetypes[cell.archetype]!)))
+    // the main part decides when a building comes down
+    const soFar = chances.comingDown(slices[0]!).givenSoFar
     return {
       buildingId: sheet.buildingId,
       outlineId: sheet.outlineId,
@@ -72,4 +75,13 @@ function presentBuildings(
       chanceThirtyYears: soFar[Math.min(29, last)]!,
     }
   })
+}
+
+function addUp(parts: readonly ReadonlyMap<Material, number>[]): ReadonlyMap<Material, number> {
+  const [first = new Map<Material, number>(), ...further] = parts
+  if (further.length === 0) return first
+  const sum = new Map(first)
+  for (const part of further)
+    for (const [material, massKg] of part) sum.set(material, (sum.get(material) ?? 0) + massKg)
+  return sum
 }

@@ -5,14 +5,9 @@ import type { MassEstimate } from '@/shared/compute/run/run.types'
 import { totalVariance } from '@/shared/compute/run/stockOfCells'
 import type { IntensityRow } from '@/shared/schemas/factorBook'
 import type { RunResult, StockCell } from '@/shared/schemas/run'
-import type { RunInputs } from './runInputs.types'
 
 /** Standing stock as the contract shows it. */
-export function presentStock(
-  inputs: RunInputs,
-  district: DistrictComputation,
-  intensities: readonly IntensityRow[],
-): RunResult['stock'] {
+export function presentStock(district: DistrictComputation, intensities: readonly IntensityRow[]): RunResult['stock'] {
   const fromMemory = new Set(
     intensities.filter(({ provenance }) => provenance === 'from-memory').map(({ rowId }) => rowId),
   )
@@ -30,7 +25,7 @@ export function presentStock(
   return {
     total: toBand(district.stock.total),
     byMaterial: byMaterial.sort((a, b) => b.band.meanKg - a.band.meanKg),
-    cells: presentCells(inputs, district),
+    cells: presentCells(district),
   }
 }
 
@@ -42,10 +37,9 @@ function rowIdsOf(material: Material, { archetypes }: DistrictComputation): stri
   return [...new Set(archetypes.flatMap(({ rowIdsByMaterial }) => rowIdsByMaterial.get(material) ?? []))].sort()
 }
 
-function presentCells({ sheets }: RunInputs, { cells, archetypes }: DistrictComputation): StockCell[] {
+function presentCells({ cells, archetypes }: DistrictComputation): StockCell[] {
   const byArchetype = new Map<number, StockCell & { massKg: Partial<Record<Material, number>> }>()
-  sheets.forEach((_, index) => {
-    const cell = cells[index]!
+  cells.forEach((cell) => {
     const archetype = archetypes[cell.archetype]!
     const { use, structure, period } = archetype
     const sum = byArchetype.get(cell.archetype) ?? {
@@ -56,7 +50,7 @@ function presentCells({ sheets }: RunInputs, { cells, archetypes }: DistrictComp
       floorAreaM2: 0,
       massKg: {},
     }
-    sum.buildingCount += 1
+    sum.buildingCount += cell.buildingCount
     sum.floorAreaM2 += cell.floorAreaM2
     for (const [material, massKg] of massOfBuilding(cell, archetype))
       sum.massKg[material] = (sum.massKg[material] ?? 0) + massKg

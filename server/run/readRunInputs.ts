@@ -1,4 +1,6 @@
 import type { Scope } from '@/server/database'
+import { sheetAnswers } from '@/shared/schemas/sheet'
+import { sliceSheet } from '@/shared/schemas/sliceSheet'
 import type { FrameCounts, RunSheet } from './runInputs.types'
 
 interface SheetRow {
@@ -19,6 +21,8 @@ interface SheetRow {
   condition: string | null
   vacancy: string | null
   is_protected: boolean | null
+  /** The answers, where there are several uses or parts. */
+  composed: unknown
 }
 
 /** The checked sheets of a round that record a standing building, as they stand now, in the order of their ids. */
@@ -29,7 +33,9 @@ export async function readCheckedSheets(scope: Scope, roundId: string): Promise<
             (s.answers #>> '{storeys,aboveGround}')::double precision AS storeys,
             s.answers #>> '{condition,condition}' AS condition,
             s.answers #>> '{vacancy,vacancy}' AS vacancy,
-            (s.answers #>> '{protection,isProtected}')::boolean AS is_protected
+            (s.answers #>> '{protection,isProtected}')::boolean AS is_protected,
+            CASE WHEN jsonb_array_length(coalesce(s.answers #> '{parts,parts}', '[]')) > 0
+                   OR jsonb_array_length(coalesce(s.answers #> '{use,otherUses}', '[]')) > 0 THEN s.answers END AS composed
      FROM sheet s
      LEFT JOIN outline o ON o.organisation_id = s.organisation_id AND o.outline_id = s.outline_id
      WHERE s.organisation_id = $organisationId AND s.round_id = $roundId AND s.state = 'checked' AND s.deleted_at IS NULL
@@ -57,6 +63,7 @@ function toRunSheet(row: SheetRow): RunSheet {
     condition: row.condition ?? 'unknown',
     vacancy: row.vacancy ?? 'unknown',
     isProtected: row.is_protected ?? false,
+    ...(row.composed ? { slices: sliceSheet(sheetAnswers.parse(row.composed)) } : {}),
   }
 }
 

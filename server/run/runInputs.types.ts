@@ -1,5 +1,6 @@
 import type { StructureOrUnknown, UseOrUnknown } from '@/shared/compute/factors/vocabulary'
 import type { Scenario } from '@/shared/schemas/run'
+import type { SheetSlice } from '@/shared/schemas/sliceSheet'
 
 /** Version of the computation; it changes when equal inputs would give other results. */
 export const ENGINE_VERSION = '1.0.0'
@@ -21,6 +22,8 @@ export interface RunSheet {
   readonly condition: string
   readonly vacancy: string
   readonly isProtected: boolean
+  /** Only where a building has several uses or parts: what of its floor area has one use, structure and age, main part first. */
+  readonly slices?: readonly SheetSlice[]
 }
 
 export interface FrameCounts {

@@ -1,31 +1,19 @@
-import { defaultAreaCv } from '@/shared/compute/area/defaultAreaCv'
-import { grossFloorArea } from '@/shared/compute/area/grossFloorArea'
-import type { AreaMethod } from '@/shared/compute/area/areaMethods'
 import type { StructureOrUnknown, UseOrUnknown } from '@/shared/compute/factors/vocabulary'
-import type { KnownBy, SheetAnswers } from './sheet'
+import type { SheetAnswers } from './sheet'
+import { sheetFloorArea, type SheetFloorArea } from './sheetFloorArea'
 
 /** What follows from the answers of a sheet, for totals and for the estimate on the phone. */
 export interface DerivedSheet {
   readonly finding: 'standing' | 'inaccessible' | 'not-a-building' | 'cleared'
+  /** Use, structure and years of the main part. */
   readonly use: UseOrUnknown
   readonly structure: StructureOrUnknown
   readonly yearFrom: number | null
   readonly yearTo: number | null
   readonly footprintM2: number | null
-  /** Null where the footprint is not answered, or nothing stands. */
+  /** With all parts; null where the footprint is not answered, or nothing stands. */
   readonly grossFloorAreaM2: number | null
   readonly floorAreaCv: number | null
-}
-
-/** Storeys taken where they are not known, and the error that goes with it: common practice. */
-export const STOREYS_IF_UNKNOWN = 2
-
-const METHOD_OF: Readonly<Record<KnownBy, AreaMethod>> = {
-  measured: 'plans',
-  register: 'map-and-storeys',
-  seen: 'map-and-storeys',
-  told: 'by-eye',
-  guessed: 'by-eye',
 }
 
 /**
@@ -36,14 +24,14 @@ const METHOD_OF: Readonly<Record<KnownBy, AreaMethod>> = {
  */
 export function deriveSheet(answers: SheetAnswers): DerivedSheet {
   const finding = answers.finding?.kind ?? 'standing'
-  const footprintM2 = answers.footprint?.footprintM2 ?? null
+  const area = finding === 'standing' ? sheetFloorArea(answers) : null
   return {
     finding,
     use: answers.use?.use ?? 'unknown',
     structure: answers.structure?.structure ?? 'unknown',
     ...yearsOf(answers.constructionYear),
-    footprintM2,
-    ...floorAreaOf(answers, finding === 'standing' ? footprintM2 : null),
+    footprintM2: answers.footprint?.footprintM2 ?? null,
+    ...totalOf(area),
   }
 }
 
@@ -53,26 +41,8 @@ function yearsOf(year: SheetAnswers['constructionYear']): Pick<DerivedSheet, 'ye
   return { yearFrom: null, yearTo: null }
 }
 
-function floorAreaOf(
-  { storeys, attic, basement, footprint }: SheetAnswers,
-  footprintM2: number | null,
-): Pick<DerivedSheet, 'grossFloorAreaM2' | 'floorAreaCv'> {
-  if (footprintM2 === null) return { grossFloorAreaM2: null, floorAreaCv: null }
-  const counted = storeys?.aboveGround ?? null
-  const grossFloorAreaM2 = grossFloorArea({
-    footprintM2,
-    storeys: counted ?? STOREYS_IF_UNKNOWN,
-    ...optionalShare('atticShare', attic?.floorShare),
-    ...optionalShare('basementShare', basement?.floorShare),
-  })
-  if (counted === null) return { grossFloorAreaM2, floorAreaCv: defaultAreaCv('imputed') }
-  return { grossFloorAreaM2, floorAreaCv: Math.max(cvOf(footprint?.knownBy), cvOf(storeys?.knownBy)) }
-}
-
-function optionalShare<Key extends string>(key: Key, share: number | null | undefined): { [name in Key]?: number } {
-  return share === null || share === undefined ? {} : ({ [key]: share } as { [name in Key]?: number })
-}
-
-function cvOf(known: KnownBy | undefined): number {
-  return defaultAreaCv(METHOD_OF[known ?? 'guessed'])
+function totalOf(area: SheetFloorArea | null): Pick<DerivedSheet, 'grossFloorAreaM2' | 'floorAreaCv'> {
+  if (!area) return { grossFloorAreaM2: null, floorAreaCv: null }
+  const grossFloorAreaM2 = area.partsM2.reduce((sum, areaM2) => sum + areaM2, area.mainM2)
+  return { grossFloorAreaM2, floorAreaCv: area.floorAreaCv }
 }

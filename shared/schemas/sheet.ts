@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { STRUCTURES, USES } from '@/shared/compute/factors/vocabulary'
+import { COMPONENTS, STRUCTURES, USES } from '@/shared/compute/factors/vocabulary'
 import { calendarYear, id, moment, shareOfOne, typedText } from './primitives'
 
 /** How an answer is known; the way sets its default error. */
@@ -7,11 +7,44 @@ export const KNOWN_BY = ['seen', 'measured', 'register', 'told', 'guessed'] as c
 export const knownBy = z.enum(KNOWN_BY)
 export type KnownBy = z.infer<typeof knownBy>
 
+/** Where an answer came from that nobody has confirmed yet by looking; absent once somebody has. */
+export const UNCONFIRMED_FROM = ['register', 'same-as-last'] as const
+export type UnconfirmedFrom = (typeof UNCONFIRMED_FROM)[number]
+const unconfirmed = z.enum(UNCONFIRMED_FROM).optional()
+const known = { knownBy: knownBy.optional(), unconfirmed }
+
 export const useOrUnknown = z.enum([...USES, 'unknown'])
 export const structureOrUnknown = z.enum([...STRUCTURES, 'unknown'])
 
 export const CONDITIONS = ['good', 'fair', 'poor', 'ruinous', 'unknown'] as const
 export const VACANCIES = ['occupied', 'partly-vacant', 'vacant', 'unknown'] as const
+export const ROOF_FORMS = ['flat', 'gable', 'hip', 'mansard', 'mono-pitch', 'other', 'unknown'] as const
+export const ROOF_COVERS = [
+  'clay-tiles',
+  'concrete-tiles',
+  'slate',
+  'fibre-cement',
+  'metal',
+  'bitumen',
+  'thatch',
+  'planted',
+  'other',
+  'unknown',
+] as const
+export const FACADES = [
+  'bare-brick',
+  'render',
+  'insulated-render',
+  'stone',
+  'timber',
+  'metal',
+  'glass',
+  'concrete',
+  'tiles',
+  'other',
+  'unknown',
+] as const
+export const PERMIT_NOTICES = ['none', 'demolition', 'alteration', 'new-building', 'unknown'] as const
 
 const storeysAboveGround = z
   .number()
@@ -19,8 +52,14 @@ const storeysAboveGround = z
   .max(150)
   .refine((storeys) => Number.isInteger(storeys * 2), { error: 'storeys come in halves' })
 
-const exactYear = z.object({ kind: z.literal('exact'), year: calendarYear, knownBy })
-const yearRange = z.object({ kind: z.literal('between'), fromYear: calendarYear, toYear: calendarYear, knownBy })
+const exactYear = z.object({ kind: z.literal('exact'), year: calendarYear, knownBy, unconfirmed })
+const yearRange = z.object({
+  kind: z.literal('between'),
+  fromYear: calendarYear,
+  toYear: calendarYear,
+  knownBy,
+  unconfirmed,
+})
 const unknownYear = z.object({ kind: z.literal('unknown') })
 
 export const constructionYear = z
@@ -33,11 +72,36 @@ export type ConstructionYear = z.infer<typeof constructionYear>
 
 /** What the surveyor found at the place: a standing building, or why there is nothing to record. */
 export const finding = z.discriminatedUnion('kind', [
-  z.object({ kind: z.literal('standing') }),
+  z.object({ kind: z.literal('standing'), unconfirmed }),
   z.object({ kind: z.literal('inaccessible') }),
   z.object({ kind: z.literal('not-a-building') }),
   z.object({ kind: z.literal('cleared'), clearedYear: calendarYear.nullable() }),
 ])
+
+/** A second use of one building; what the others leave is the main use's share. */
+const otherUse = z.object({ use: z.enum(USES), share: shareOfOne.refine((share) => share > 0, { error: 'no share' }) })
+export type OtherUse = z.infer<typeof otherUse>
+
+export const MOST_OTHER_USES = 5
+export const MOST_PARTS = 12
+export const MOST_REFURBISHMENTS = 12
+
+/** A part of a building with an age, a structure and a size of its own; the sheet's other answers are of the main part. */
+const buildingPart = z.object({
+  name: typedText(80),
+  footprintM2: z.number().positive().max(2_000_000),
+  aboveGround: storeysAboveGround.nullable(),
+  /** Null: used as the main part is. */
+  use: z.enum(USES).nullable(),
+  structure: structureOrUnknown,
+  constructionYear,
+})
+export type BuildingPart = z.infer<typeof buildingPart>
+
+const refurbishment = z.object({ component: z.enum(COMPONENTS), year: constructionYear })
+export type Refurbishment = z.infer<typeof refurbishment>
+
+const heightM = z.number().min(0.5).max(900).nullable()
 
 /**
  * The field groups of a sheet. Each group merges as one value and carries how it is known.
@@ -50,16 +114,31 @@ export const sheetGroups = {
     latitude: z.number().min(-90).max(90),
     accuracyM: z.number().min(0).max(100_000),
   }),
-  use: z.object({ use: useOrUnknown, knownBy: knownBy.optional() }),
-  structure: z.object({ structure: structureOrUnknown, knownBy: knownBy.optional() }),
-  storeys: z.object({ aboveGround: storeysAboveGround.nullable(), knownBy: knownBy.optional() }),
-  footprint: z.object({ footprintM2: z.number().positive().max(2_000_000), knownBy }),
-  attic: z.object({ floorShare: shareOfOne.nullable(), knownBy: knownBy.optional() }),
-  basement: z.object({ floorShare: shareOfOne.nullable(), knownBy: knownBy.optional() }),
+  use: z.object({
+    use: useOrUnknown,
+    otherUses: z
+      .array(otherUse)
+      .max(MOST_OTHER_USES)
+      .refine((uses) => uses.reduce((sum, { share }) => sum + share, 0) < 1, { error: 'no share is left' })
+      .optional(),
+    ...known,
+  }),
+  structure: z.object({ structure: structureOrUnknown, ...known }),
+  storeys: z.object({ aboveGround: storeysAboveGround.nullable(), ...known }),
+  footprint: z.object({ footprintM2: z.number().positive().max(2_000_000), knownBy, unconfirmed }),
+  attic: z.object({ floorShare: shareOfOne.nullable(), ...known }),
+  basement: z.object({ floorShare: shareOfOne.nullable(), ...known }),
   constructionYear,
-  condition: z.object({ condition: z.enum(CONDITIONS), knownBy: knownBy.optional() }),
-  vacancy: z.object({ vacancy: z.enum(VACANCIES), knownBy: knownBy.optional() }),
-  protection: z.object({ isProtected: z.boolean(), knownBy: knownBy.optional() }),
+  condition: z.object({ condition: z.enum(CONDITIONS), ...known }),
+  vacancy: z.object({ vacancy: z.enum(VACANCIES), ...known }),
+  protection: z.object({ isProtected: z.boolean(), ...known }),
+  parts: z.object({ parts: z.array(buildingPart).max(MOST_PARTS), knownBy: knownBy.optional() }),
+  heights: z.object({ eavesM: heightM, ridgeM: heightM, storeyHeightM: heightM, ...known }),
+  roof: z.object({ form: z.enum(ROOF_FORMS).nullable(), cover: z.enum(ROOF_COVERS).nullable(), ...known }),
+  facade: z.object({ facade: z.enum(FACADES), ...known }),
+  openings: z.object({ openingsShare: shareOfOne.nullable(), ...known }),
+  refurbishments: z.object({ done: z.array(refurbishment).max(MOST_REFURBISHMENTS) }),
+  permitNotice: z.object({ notice: z.enum(PERMIT_NOTICES), reference: typedText(120), ...known }),
   suspicions: z.object({ seen: z.array(z.string().max(120)).max(30) }),
   notes: z.object({ text: typedText(4_000) }),
 } as const
@@ -94,6 +173,10 @@ export const sheetReadyForBag = sheetAnswers.superRefine((answers, context) => {
   if (answers.finding && answers.finding.kind !== 'standing') return
   for (const group of ['use', 'structure', 'storeys', 'footprint', 'constructionYear'] as const) {
     if (!answers[group]) context.addIssue({ code: 'custom', path: [group], message: 'not-answered' })
+  }
+  const partsM2 = (answers.parts?.parts ?? []).reduce((sum, { footprintM2 }) => sum + footprintM2, 0)
+  if (answers.footprint && partsM2 > answers.footprint.footprintM2) {
+    context.addIssue({ code: 'custom', path: ['parts'], message: 'larger-than-the-whole' })
   }
 })
 

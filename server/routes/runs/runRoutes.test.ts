@@ -75,6 +75,29 @@ describe('from checked sheets to loads ahead', () => {
     expect(Math.abs(total - run.result.stock.total.meanKg)).toBeLessThan(1e-9 * total)
   })
 
+  it('tallies the parts of a building by their own structure, and the buildings still add up to the total', async () => {
+    const part = { name: 'hall', footprintM2: 1, aboveGround: 1, use: 'hotel', structure: 'earth' }
+    const parts = { parts: [{ ...part, constructionYear: { kind: 'exact', year: 2001, knownBy: 'told' } }] }
+    await app.owner.run(
+      `UPDATE sheet SET answers = answers || $parts::jsonb WHERE sheet_id =
+         (SELECT sheet_id FROM sheet WHERE round_id = $roundId AND state = 'checked' AND finding = 'standing'
+            AND footprint_m2 > 50 ORDER BY sheet_id LIMIT 1)`,
+      { parts: JSON.stringify({ parts }), roundId },
+    )
+    const started = await start({ roundId, editionId, scenario: { name: 'With a hall' } })
+    const path = `/api/v1/runs/${started.body.runId as string}`
+    const { body } = await app.http.get(path).set('Authorization', planner)
+    const { body: list } = await app.http.get(`${path}/buildings`).set('Authorization', planner)
+    const { cells, total } = (body as { result: RunResult }).result.stock
+
+    expect(cells.filter(({ use, structure }) => use === 'hotel' && structure === 'earth')).toMatchObject([
+      { period: '1991-2005', buildingCount: 0, floorAreaM2: 1 },
+    ])
+    expect(cells.reduce((sum, { buildingCount }) => sum + buildingCount, 0)).toBe(run.result.basis.computedCount)
+    const massKg = (list.buildings as { massKg: number }[]).reduce((sum, building) => sum + building.massKg, 0)
+    expect(Math.abs(massKg - total.meanKg)).toBeLessThan(1e-9 * massKg)
+  })
+
   it('refuses a round without checked sheets, in words', async () => {
     const empty = await start({ roundId: demoId('nowhere'), editionId, scenario: { name: 'x' } })
     expect(empty.status).toBe(404)

@@ -25,6 +25,13 @@ export interface SurveyedBuilding {
   readonly grossFloorAreaM2: number
   readonly floorAreaCv: number
   readonly hazardMultiplier: number
+  /**
+   * For a slice of a building with another use, structure or age: the floor area of the whole building [m²]. Slices stand
+   * and fall together, so their squares count as A·A(whole), which add up to the square of the whole.
+   */
+  readonly wholeFloorAreaM2?: number
+  /** A slice that is not the main one is no further building. */
+  readonly isFurtherSlice?: boolean
 }
 
 export interface DistrictConventions {
@@ -35,7 +42,7 @@ export interface DistrictConventions {
 
 export interface DistrictComputation {
   readonly archetypes: readonly ResolvedArchetype[]
-  /** One cell a building, in their order: receipts end here. */
+  /** One cell a building, or a slice of one, in their order: receipts end here. */
   readonly cells: readonly BuildingCell[]
   readonly stock: StockEstimate
   readonly yearsAhead: YearsAhead
@@ -114,7 +121,7 @@ function periodOf({ yearFrom, yearTo }: SurveyedBuilding): PeriodIdOrUnknown {
 }
 
 function toCell(building: SurveyedBuilding, archetype: number): BuildingCell {
-  const { grossFloorAreaM2, floorAreaCv } = building
+  const { grossFloorAreaM2, floorAreaCv, wholeFloorAreaM2 = grossFloorAreaM2 } = building
   if (!(grossFloorAreaM2 > 0) || !(floorAreaCv >= 0))
     throw new ComputeError('negative-area', { buildingId: building.buildingId, grossFloorAreaM2, floorAreaCv })
   return {
@@ -122,10 +129,10 @@ function toCell(building: SurveyedBuilding, archetype: number): BuildingCell {
     yearFrom: building.yearFrom,
     yearTo: building.yearTo,
     hazardMultiplier: building.hazardMultiplier,
-    buildingCount: 1,
+    buildingCount: building.isFurtherSlice ? 0 : 1,
     floorAreaM2: grossFloorAreaM2,
-    floorAreaSquaredM4: grossFloorAreaM2 ** 2,
-    floorAreaVarianceM4: (grossFloorAreaM2 * floorAreaCv) ** 2,
+    floorAreaSquaredM4: grossFloorAreaM2 * wholeFloorAreaM2,
+    floorAreaVarianceM4: grossFloorAreaM2 * floorAreaCv * (wholeFloorAreaM2 * floorAreaCv),
   }
 }
 
