@@ -47,15 +47,18 @@ export function sheetFloorArea(answers: SheetAnswers): SheetFloorArea | null {
 
 function mainPart({ storeys, attic, basement, footprint, parts }: SheetAnswers): { areaM2: number; cv: number } | null {
   if (!footprint) return null
-  const takenM2 = (parts?.parts ?? []).reduce((sum, { footprintM2 }) => sum + footprintM2, 0)
   const counted = storeys?.aboveGround ?? null
   const areaM2 = grossFloorArea({
-    footprintM2: Math.max(0, footprint.footprintM2 - takenM2),
+    footprintM2: Math.max(0, footprint.footprintM2 - takenByParts(parts)),
     storeys: counted ?? STOREYS_IF_UNKNOWN,
     ...optionalShare('atticShare', attic?.floorShare),
     ...optionalShare('basementShare', basement?.floorShare),
   })
   return { areaM2, cv: counted === null ? defaultAreaCv('imputed') : worseCv(footprint.knownBy, storeys?.knownBy) }
+}
+
+function takenByParts(parts: SheetAnswers['parts']): number {
+  return (parts?.parts ?? []).reduce((sum, { footprintM2 }) => sum + footprintM2, 0)
 }
 
 function worseCv(one: KnownBy | undefined, other: KnownBy | undefined): number {
