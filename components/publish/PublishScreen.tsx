@@ -117,7 +117,7 @@ function PublicationTable({ publications, onWithdraw }: PublicationTableProps) {
         },
         {
           key: 'act',
-          head: '',
+          head: t('common.act'),
           cell: (publication) =>
             publication.withdrawnAt === null ? (
               <Button

@@ -145,7 +145,7 @@ function Place({ sheet }: { readonly sheet: ReviewSheet }) {
   return (
     <Panel title={t('review.place')} grow>
       <OutlineMap
-        label={t('review.place')}
+        label={t('review.placeMap')}
         outlines={outlines}
         paint={paint}
         userPosition={position ?? null}

@@ -56,7 +56,7 @@ export function BeatTable({ round, onEdit }: BeatTableProps) {
           },
           {
             key: 'dissolve',
-            head: '',
+            head: t('common.act'),
             cell: (beat) => (
               <Button
                 kind="quiet"

@@ -13,7 +13,7 @@ const MOST_RETRIES = 2
 /** Look, texts, session and server reads for everything below. */
 export function AppProviders({ children }: { readonly children: ReactNode }) {
   const [session] = useState(openDeviceSession)
-  const [messages] = useState(() => createMessages('en'))
+  const [messages] = useState(() => createMessages('en-GB'))
   const [queries] = useState(
     () =>
       new QueryClient({

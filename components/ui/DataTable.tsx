@@ -55,6 +55,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   const [order, setOrder] = useState<SortOrder | null>(null)
   const [shownCount, setShownCount] = useState(pageSize)
   const [widthPx, setWidthPx] = useState(0)
+  const [contentPx, setContentPx] = useState(0)
   if (rows.length === 0 && empty) return <>{empty}</>
 
   const sortBy = columns.find((column) => column.key === order?.key)?.sortBy
@@ -71,7 +72,8 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
         horizontal
         contentContainerStyle={styles.wide}
         onLayout={(event) => setWidthPx(event.nativeEvent.layout.width)}
-        {...webOnly({ dataSet: { printFlow: '' }, ...(widthPx > 0 && widthPx < leastWidth ? { tabIndex: 0 } : {}) })}
+        onContentSizeChange={setContentPx}
+        {...webOnly({ dataSet: { printFlow: '' }, ...(contentPx > widthPx ? { tabIndex: 0 } : {}) })}
       >
         <View
           role="table"

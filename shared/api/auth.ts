@@ -11,7 +11,7 @@ export const session = z.object({
 export type Session = z.infer<typeof session>
 
 const device = z.object({ deviceId: id, name: typedText(120) })
-const token = z.object({ token: z.string().min(20).max(200) })
+const token = z.object({ token: z.string().min(1).max(200) })
 
 export const signIn = defineEndpoint({
   method: 'POST',

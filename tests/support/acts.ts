@@ -8,6 +8,7 @@ export async function signIn(page: Page, server: AppServer, role: string): Promi
   await page.getByRole('textbox', { name: 'E-mail' }).fill(account.email)
   await page.getByRole('textbox', { name: 'Password' }).fill(account.password)
   await page.getByRole('button', { name: 'Sign in', exact: true }).click()
+  await expect(page.getByRole('textbox', { name: 'Password' })).toBeHidden({ timeout: 30_000 })
 }
 
 /** What a surveyor answers in {@link recordNearest}. */
