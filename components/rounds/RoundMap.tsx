@@ -5,16 +5,19 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { useTheme } from '@/components/ui/theme/ThemeProvider'
 import type { RoundWithBeats } from '@/shared/api/rounds'
 import { useApi } from '@/sync/react/SessionProvider'
+import { outlinesWithin } from './outlinesWithin'
 import { districtBlocksQuery, districtOutlinesQuery } from './roundQueries'
 
 interface RoundMapProps {
   readonly round: RoundWithBeats
   readonly selectedIds: readonly string[]
   readonly onToggle: (outlineId: string) => void
+  /** Adds what lies in a drawn area. */
+  readonly onAdd: (outlineIds: readonly string[]) => void
 }
 
 /** The frame on the map: free buildings pale, those of a beat in turn light and dark, blocks as lines. */
-export function RoundMap({ round, selectedIds, onToggle }: RoundMapProps) {
+export function RoundMap({ round, selectedIds, onToggle, onAdd }: RoundMapProps) {
   const { t } = useMessages()
   const { colours } = useTheme()
   const api = useApi()
@@ -57,6 +60,7 @@ export function RoundMap({ round, selectedIds, onToggle }: RoundMapProps) {
       paint={paint}
       selectedIds={selectedIds}
       onPress={onToggle}
+      onDraw={(area) => onAdd(outlinesWithin(drawn, area).filter((outlineId) => beatOf.get(outlineId) !== undefined))}
       areas={areas}
       fitKey={`${round.roundId}-${drawn.length > 0}`}
       heightPx={460}

@@ -77,7 +77,12 @@ function RoundBody({ round }: { readonly round: RoundWithBeats }) {
         title={edited ? t('rounds.changeBeat', { name: edited.name }) : t('rounds.makeBeat')}
         note={t('rounds.selected', { count: selectedIds.length })}
       >
-        <RoundMap round={round} selectedIds={selectedIds} onToggle={(outlineId) => toggle([outlineId])} />
+        <RoundMap
+          round={round}
+          selectedIds={selectedIds}
+          onToggle={(outlineId) => toggle([outlineId])}
+          onAdd={(outlineIds) => setSelectedIds((now) => [...new Set([...now, ...outlineIds])])}
+        />
         <BeatForm
           key={edited?.beatId ?? 'new'}
           round={round}

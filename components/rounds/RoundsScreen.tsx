@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import { useRouter, type Href } from 'expo-router'
 import { useState } from 'react'
+import { StyleSheet, View } from 'react-native'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { Button } from '@/components/ui/Button'
 import { DataTable } from '@/components/ui/DataTable'
@@ -9,6 +10,7 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { Progress } from '@/components/ui/Progress'
 import { Screen } from '@/components/ui/Screen'
+import { SPACE } from '@/components/ui/theme/tokens'
 import { formatCount, formatDate, formatShare } from '@/shared/format'
 import { useApi } from '@/sync/react/SessionProvider'
 import { NewRoundDialog } from './NewRoundDialog'
@@ -35,11 +37,20 @@ function DistrictsPanel() {
     <Panel
       title={t('rounds.districts')}
       action={
-        <Button
-          label={t('rounds.importOutlines')}
-          kind={hasDistrict ? 'secondary' : 'primary'}
-          onPress={() => router.navigate('/rounds/import' as Href)}
-        />
+        <View style={styles.row}>
+          {hasDistrict ? (
+            <Button
+              kind="quiet"
+              label={t('rounds.drawDistrict')}
+              onPress={() => router.navigate('/rounds/draw' as Href)}
+            />
+          ) : null}
+          <Button
+            label={t('rounds.importOutlines')}
+            kind={hasDistrict ? 'secondary' : 'primary'}
+            onPress={() => router.navigate('/rounds/import' as Href)}
+          />
+        </View>
       }
     >
       {districts.error ? <ProblemNotice error={districts.error} onRetry={() => void districts.refetch()} /> : null}
@@ -139,3 +150,5 @@ function RoundsPanel() {
     </>
   )
 }
+
+const styles = StyleSheet.create({ row: { flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.small } })

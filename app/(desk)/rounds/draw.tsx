@@ -1,0 +1,5 @@
+import { DrawDistrictScreen } from '@/components/rounds/DrawDistrictScreen'
+
+export default function DrawDistrictRoute() {
+  return <DrawDistrictScreen />
+}
