@@ -3,6 +3,7 @@ import { AppText } from '@/components/ui/AppText'
 import { Button } from '@/components/ui/Button'
 import { CheckBox } from '@/components/ui/CheckBox'
 import { Choice } from '@/components/ui/Choice'
+import { useLanguageChoice } from '@/components/ui/LanguageProvider'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Notice } from '@/components/ui/Notice'
 import { Panel } from '@/components/ui/Panel'
@@ -10,6 +11,7 @@ import { Screen } from '@/components/ui/Screen'
 import { useThemeChoice } from '@/components/ui/theme/ThemeProvider'
 import { SPACE } from '@/components/ui/theme/tokens'
 import type { FieldStore } from '@/db/fieldStore.types'
+import { isLanguage, LANGUAGES } from '@/shared/messages/languages'
 import { useStored } from '@/sync/react/FieldProvider'
 import { useAccount, useSession, useSessionStore } from '@/sync/react/SessionProvider'
 
@@ -19,6 +21,7 @@ interface MeScreenProps {
 }
 
 const readBag = (store: FieldStore) => store.readBag()
+const SPOKEN = Object.keys(LANGUAGES).filter(isLanguage)
 const LOOKS = ['system', 'limewash', 'night'] as const
 
 /** Account, device, look, language and units, and the way out that deletes nothing. */
@@ -29,6 +32,7 @@ export function MeScreen({ deviceName, onSignIn }: MeScreenProps) {
   const { mustSignInAgain } = useSession()
   const bag = useStored(readBag)
   const { look, isBrightSun, setLook, setBrightSun } = useThemeChoice()
+  const { language, setLanguage } = useLanguageChoice()
   const waiting = (bag?.sheetCount ?? 0) + (bag?.startedCount ?? 0)
   return (
     <Screen title={t('me.title')} subtitle={account.name} width="form">
@@ -58,7 +62,12 @@ export function MeScreen({ deviceName, onSignIn }: MeScreenProps) {
           checked={isBrightSun}
           onChange={setBrightSun}
         />
-        <Fact name={t('me.language')} value={t('me.languageEnglish')} />
+        <Choice
+          label={t('me.language')}
+          value={language}
+          onChange={setLanguage}
+          options={SPOKEN.map((value) => ({ value, label: LANGUAGES[value].ownName }))}
+        />
         <Fact name={t('me.units')} value={t('me.unitsMetric')} />
       </Panel>
       <Panel title={t('me.device')}>

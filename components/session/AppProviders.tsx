@@ -1,9 +1,8 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query'
 import { useState, type ReactNode } from 'react'
-import { MessagesProvider } from '@/components/ui/MessagesProvider'
+import { LanguageProvider } from '@/components/ui/LanguageProvider'
 import { ThemeProvider } from '@/components/ui/theme/ThemeProvider'
 import { ToastProvider } from '@/components/ui/Toast'
-import { createMessages } from '@/shared/messages/createMessages'
 import { ApiError } from '@/sync/api/ApiError'
 import { SessionProvider } from '@/sync/react/SessionProvider'
 import { openDeviceSession } from './deviceSession'
@@ -13,7 +12,6 @@ const MOST_RETRIES = 2
 /** Look, texts, session and server reads for everything below. */
 export function AppProviders({ children }: { readonly children: ReactNode }) {
   const [session] = useState(openDeviceSession)
-  const [messages] = useState(() => createMessages('en-GB'))
   const [queries] = useState(
     () =>
       new QueryClient({
@@ -29,13 +27,13 @@ export function AppProviders({ children }: { readonly children: ReactNode }) {
   )
   return (
     <ThemeProvider>
-      <MessagesProvider messages={messages}>
+      <LanguageProvider>
         <SessionProvider store={session}>
           <QueryClientProvider client={queries}>
             <ToastProvider>{children}</ToastProvider>
           </QueryClientProvider>
         </SessionProvider>
-      </MessagesProvider>
+      </LanguageProvider>
     </ThemeProvider>
   )
 }
