@@ -7,15 +7,25 @@ import { Select } from '@/components/ui/Select'
 import { SPACE } from '@/components/ui/theme/tokens'
 import type { LoadsAhead } from '@/shared/api/publications'
 import { formatYearRange } from '@/shared/format'
+import type { YardPlan } from '@/shared/schemas/yardPlan'
+import { CapacityPanel } from './CapacityPanel'
 import { codeTotals, linesBetween } from './codeTotals'
 import { LoadSources } from './LoadSources'
+import { RecoveryPanel } from './RecoveryPanel'
 import { WasteTable } from './WasteTable'
 
 /** Years that are shown at first. */
 const FIRST_YEARS = 10
 
-/** The loads of a span of years: totals by code, then year by year, then where the densities come from. */
-export function LoadsReport({ loads }: { readonly loads: LoadsAhead }) {
+interface LoadsReportProps {
+  readonly loads: LoadsAhead
+  readonly plan: YardPlan
+  readonly isKeeping: boolean
+  readonly onKeep: (plan: YardPlan) => void
+}
+
+/** The loads of a span of years: by code, beside my plant, what I recover, year by year, and where densities come from. */
+export function LoadsReport({ loads, plan, isKeeping, onKeep }: LoadsReportProps) {
   const { t } = useMessages()
   const { years } = loads
   const [wantedFrom, setFrom] = useState<number | null>(null)
@@ -23,6 +33,7 @@ export function LoadsReport({ loads }: { readonly loads: LoadsAhead }) {
   const fromYear = wantedFrom ?? years[0] ?? 0
   const toYear = Math.max(fromYear, wantedTo ?? years[FIRST_YEARS - 1] ?? years.at(-1) ?? 0)
   const lines = linesBetween(loads.lines, fromYear, toYear)
+  const totals = codeTotals(lines)
   const span = formatYearRange(fromYear, toYear)
   const name = `loads-ahead-run-${loads.publication.runNumber}`
   const toOption = (year: number) => ({ value: String(year), label: String(year) })
@@ -51,12 +62,14 @@ export function LoadsReport({ loads }: { readonly loads: LoadsAhead }) {
       <Panel title={t('loads.totals', { years: span })}>
         <WasteTable
           label={t('loads.totals', { years: span })}
-          rows={codeTotals(lines)}
+          rows={totals}
           hasYears={false}
           fileName={`${name}-totals.csv`}
         />
         <AppText soft>{t('loads.totalsNote')}</AppText>
       </Panel>
+      <CapacityPanel lines={lines} capacityTPerYear={plan.capacityTPerYear} fileName={`${name}-plant.csv`} />
+      <RecoveryPanel totals={totals} plan={plan} isKeeping={isKeeping} onKeep={onKeep} />
       <Panel title={t('loads.byYear')} note={span}>
         <WasteTable label={t('loads.byYear')} rows={lines} hasYears fileName={`${name}-by-year.csv`} />
       </Panel>

@@ -1,18 +1,20 @@
-import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { AppText } from '@/components/ui/AppText'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Notice } from '@/components/ui/Notice'
 import { Screen } from '@/components/ui/Screen'
 import { TitleBlock } from '@/components/ui/TitleBlock'
+import { useToast } from '@/components/ui/Toast'
 import type { Publication } from '@/shared/api/publications'
+import { saveYardPlan } from '@/shared/api/yard'
 import { formatDate } from '@/shared/format'
+import type { YardPlan } from '@/shared/schemas/yardPlan'
 import { useApi } from '@/sync/react/SessionProvider'
-import { FleetForm } from './FleetForm'
-import { loadsAheadQuery, yardPublicationsQuery, type Fleet } from './loadQueries'
+import { loadsAheadQuery, yardPlanQuery, yardPublicationsQuery } from './loadQueries'
 import { LoadsBasis } from './LoadsBasis'
 import { LoadsReport } from './LoadsReport'
+import { PlantForm } from './PlantForm'
 
 interface PublicationLoadsScreenProps {
   readonly publicationId: string
@@ -42,10 +44,37 @@ export function PublicationLoadsScreen({ publicationId, onBack }: PublicationLoa
   return <OpenPublication publicationId={publicationId} onBack={onBack} />
 }
 
-function OpenPublication({ publicationId, onBack }: PublicationLoadsScreenProps) {
+function OpenPublication(props: PublicationLoadsScreenProps) {
   const { t } = useMessages()
-  const [fleet, setFleet] = useState<Fleet>({ containerM3: 30, payloadT: 13 })
-  const { data: loads, error, isFetching, refetch } = useQuery(loadsAheadQuery(useApi(), publicationId, fleet))
+  const plan = useQuery(yardPlanQuery(useApi()))
+  if (plan.data) return <PlannedLoads {...props} plan={plan.data} />
+  return (
+    <Screen title={t('loads.title')} onBack={props.onBack}>
+      {plan.error ? <ProblemNotice error={plan.error} onRetry={() => void plan.refetch()} /> : null}
+      {plan.isPending ? <AppText soft>{t('common.loading')}</AppText> : null}
+    </Screen>
+  )
+}
+
+function PlannedLoads({ publicationId, onBack, plan }: PublicationLoadsScreenProps & { readonly plan: YardPlan }) {
+  const { t } = useMessages()
+  const api = useApi()
+  const queries = useQueryClient()
+  const toast = useToast()
+  const { containerM3, payloadT } = plan
+  const {
+    data: loads,
+    error,
+    isFetching,
+    refetch,
+  } = useQuery(loadsAheadQuery(api, publicationId, { containerM3, payloadT }))
+  const keep = useMutation({
+    mutationFn: (wanted: YardPlan) => api.call(saveYardPlan, { body: wanted }),
+    onSuccess: (kept) => {
+      queries.setQueryData(yardPlanQuery(api).queryKey, kept)
+      toast(t('loads.planKept'), 'good')
+    },
+  })
   return (
     <Screen
       title={loads?.publication.title ?? t('loads.title')}
@@ -55,10 +84,11 @@ function OpenPublication({ publicationId, onBack }: PublicationLoadsScreenProps)
       aside={loads ? <LoadsBasis loads={loads} /> : undefined}
     >
       {error ? <ProblemNotice error={error} onRetry={() => void refetch()} /> : null}
+      {keep.error ? <ProblemNotice error={keep.error} isSending /> : null}
       {loads ? (
         <>
-          <FleetForm fleet={fleet} isCounting={isFetching} onApply={setFleet} />
-          <LoadsReport loads={loads} />
+          <PlantForm plan={plan} isCounting={isFetching || keep.isPending} onKeep={keep.mutate} />
+          <LoadsReport loads={loads} plan={plan} isKeeping={keep.isPending} onKeep={keep.mutate} />
           <PublicationTitleBlock publication={loads.publication} />
         </>
       ) : null}

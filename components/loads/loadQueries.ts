@@ -1,5 +1,6 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query'
 import { listYardPublications, readLoadsAhead } from '@/shared/api/publications'
+import { readYardPlan } from '@/shared/api/yard'
 import type { ApiClient } from '@/sync/api/createApiClient'
 
 /** What one vehicle carries. */
@@ -22,3 +23,7 @@ export const loadsAheadQuery = (api: ApiClient, publicationId: string, fleet: Fl
     queryFn: ({ signal }) => api.call(readLoadsAhead, { params: { publicationId }, query: { ...fleet } }, signal),
     placeholderData: keepPreviousData,
   })
+
+/** My vehicles, plant and recovery shares. */
+export const yardPlanQuery = (api: ApiClient) =>
+  queryOptions({ queryKey: ['yard', 'plan'], queryFn: ({ signal }) => api.call(readYardPlan, {}, signal) })

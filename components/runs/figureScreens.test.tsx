@@ -12,6 +12,7 @@ import { MessagesProvider } from '@/components/ui/MessagesProvider'
 import { ThemeProvider } from '@/components/ui/theme/ThemeProvider'
 import { ToastProvider } from '@/components/ui/Toast'
 import type { LoadsAhead, Publication } from '@/shared/api/publications'
+import { FIRST_YARD_PLAN } from '@/shared/schemas/yardPlan'
 import { createMessages } from '@/shared/messages/createMessages'
 import type { FullEdition } from '@/shared/schemas/factorBook'
 import { exampleResult, exampleRun } from './runExample'
@@ -87,6 +88,7 @@ const replies: Readonly<Record<string, unknown>> = {
   '/publications': { publications: [publication, withdrawn] },
   '/yard/publications': { publications: [publication, withdrawn] },
   '/yard/publications/:publicationId/loads': loads,
+  '/yard/plan': FIRST_YARD_PLAN,
   '/factor-book/editions': { editions: [edition] },
   '/factor-book/editions/:editionId': edition,
   '/people': { people: [] },
@@ -95,7 +97,9 @@ const replies: Readonly<Record<string, unknown>> = {
 afterEach(cleanup)
 
 function show(children: ReactNode): void {
-  call.mockImplementation(({ path }: { path: string }) => Promise.resolve(replies[path]))
+  call.mockImplementation(({ path, method }: { path: string; method: string }, input: { body?: unknown }) =>
+    Promise.resolve(method === 'PUT' ? input.body : replies[path]),
+  )
   render(
     <ThemeProvider>
       <MessagesProvider messages={createMessages('en')}>
@@ -126,12 +130,14 @@ describe('screens of figures', () => {
     expect(screen.getByText(/not split by component/)).toBeTruthy()
   })
 
-  it('counts loads anew with other vehicles', async () => {
+  it('keeps my vehicles and plant, counts the loads anew, and says which years exceed the plant', async () => {
     show(<PublicationLoadsScreen publicationId={publication.publicationId} onBack={vi.fn()} />)
     expect(await screen.findByRole('table', { name: 'Totals by waste code, 2027–2028' })).toBeTruthy()
+    expect(screen.getByText(/Say above what your plant takes in/)).toBeTruthy()
 
     fireEvent.change(screen.getByRole('textbox', { name: /Container/ }), { target: { value: '12' } })
-    fireEvent.click(screen.getByRole('button', { name: 'Count the loads anew' }))
+    fireEvent.change(screen.getByRole('textbox', { name: /My plant takes in/ }), { target: { value: '3' } })
+    fireEvent.click(screen.getByRole('button', { name: 'Keep and count anew' }))
 
     await vi.waitFor(() =>
       expect(call).toHaveBeenCalledWith(
@@ -140,6 +146,16 @@ describe('screens of figures', () => {
         expect.anything(),
       ),
     )
+    expect(await screen.findByText('0 of 2 years exceed the plant; 2 more may.')).toBeTruthy()
+  })
+
+  it('holds what is recovered against the target of the directive', async () => {
+    show(<PublicationLoadsScreen publicationId={publication.publicationId} onBack={vi.fn()} />)
+    expect(await screen.findByText(/the target of 70 % by weight .* is not met/)).toBeTruthy()
+
+    fireEvent.change(screen.getByRole('textbox', { name: /17 02 01 wood/ }), { target: { value: '80' } })
+
+    expect(await screen.findByText(/80 % of 4 t of non-hazardous waste .* is met/)).toBeTruthy()
   })
 
   it('shows why a publication was withdrawn instead of its figures', async () => {

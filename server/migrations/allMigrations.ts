@@ -6,6 +6,7 @@ import { m0005OutlineBlocks } from './m0005OutlineBlocks'
 import { m0006Sync } from './m0006Sync'
 import { m0007SheetKeys } from './m0007SheetKeys'
 import { m0008SheetRecorder } from './m0008SheetRecorder'
+import { m0018YardPlan } from './m0018YardPlan'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
@@ -18,4 +19,5 @@ export const allMigrations: readonly Migration[] = [
   m0006Sync,
   m0007SheetKeys,
   m0008SheetRecorder,
+  m0018YardPlan,
 ]

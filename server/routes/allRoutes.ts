@@ -11,6 +11,7 @@ import { reviewRoutes } from './review/reviewRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
 import { runRoutes } from './runs/runRoutes'
 import { syncRoutes } from './sync/syncRoutes'
+import { yardRoutes } from './yard/yardRoutes'
 
 /** The routes of every resource; each knows its endpoints of the contract. */
 export const allRoutes: readonly ((context: Context) => Router)[] = [
@@ -25,4 +26,5 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   factorBookRoutes,
   runRoutes,
   publicationRoutes,
+  yardRoutes,
 ]

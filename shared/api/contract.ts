@@ -9,11 +9,12 @@ import * as review from './review'
 import * as rounds from './rounds'
 import * as runs from './runs'
 import * as sync from './sync'
+import * as yard from './yard'
 
 /** Every endpoint of the product, by name: the route table that server, tests and documents walk. */
 export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
   Object.fromEntries(
-    [auth, people, outlines, rounds, sync, review, factorBook, runs, publications, health].flatMap((resource) =>
+    [auth, people, outlines, rounds, sync, review, factorBook, runs, publications, yard, health].flatMap((resource) =>
       Object.entries(resource).filter(([, value]) => isEndpoint(value)),
     ),
   ) as Record<string, Endpoint>,

@@ -6,23 +6,26 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { NumberField } from '@/components/ui/NumberField'
 import { Panel } from '@/components/ui/Panel'
 import { SPACE } from '@/components/ui/theme/tokens'
-import { fleet as fleetSchema } from '@/shared/api/publications'
 import { formatDecimal } from '@/shared/format'
-import type { Fleet } from './loadQueries'
+import { yardPlan, type YardPlan } from '@/shared/schemas/yardPlan'
 
-interface FleetFormProps {
-  readonly fleet: Fleet
+interface PlantFormProps {
+  readonly plan: YardPlan
   readonly isCounting: boolean
-  readonly onApply: (fleet: Fleet) => void
+  readonly onKeep: (plan: YardPlan) => void
 }
 
-/** What my vehicles carry; the loads are counted anew with it. */
-export function FleetForm({ fleet, isCounting, onApply }: FleetFormProps) {
+const { containerM3: containerRule, payloadT: payloadRule, capacityTPerYear: capacityRule } = yardPlan.shape
+
+/** What my vehicles carry and my plant takes in; kept for the next visit, and the loads are counted anew with it. */
+export function PlantForm({ plan, isCounting, onKeep }: PlantFormProps) {
   const { t, locale } = useMessages()
-  const [containerM3, setContainer] = useState<number | null>(fleet.containerM3)
-  const [payloadT, setPayload] = useState<number | null>(fleet.payloadT)
-  const isContainerFine = containerM3 !== null && fleetSchema.shape.containerM3.safeParse(containerM3).success
-  const isPayloadFine = payloadT !== null && fleetSchema.shape.payloadT.safeParse(payloadT).success
+  const [containerM3, setContainer] = useState<number | null>(plan.containerM3)
+  const [payloadT, setPayload] = useState<number | null>(plan.payloadT)
+  const [capacityTPerYear, setCapacity] = useState<number | null>(plan.capacityTPerYear)
+  const isContainerFine = containerRule.safeParse(containerM3).success
+  const isPayloadFine = payloadRule.safeParse(payloadT).success
+  const isCapacityFine = capacityRule.safeParse(capacityTPerYear).success
   return (
     <Panel title={t('loads.fleet')}>
       <AppText soft>{t('loads.fleetNote')}</AppText>
@@ -45,20 +48,30 @@ export function FleetForm({ fleet, isCounting, onApply }: FleetFormProps) {
             error={isPayloadFine ? undefined : t('loads.payloadFault')}
           />
         </View>
+        <View style={styles.field}>
+          <NumberField
+            label={t('loads.capacity')}
+            unit="t/a"
+            grouping
+            value={capacityTPerYear}
+            onChange={setCapacity}
+            error={isCapacityFine ? undefined : t('loads.capacityFault')}
+          />
+        </View>
         <Button
           kind="primary"
-          label={t('loads.apply')}
+          label={t('loads.keepPlan')}
           busy={isCounting}
-          disabled={!isContainerFine || !isPayloadFine}
+          disabled={!isContainerFine || !isPayloadFine || !isCapacityFine}
           onPress={() => {
-            if (containerM3 !== null && payloadT !== null) onApply({ containerM3, payloadT })
+            if (containerM3 !== null && payloadT !== null) onKeep({ ...plan, containerM3, payloadT, capacityTPerYear })
           }}
         />
       </View>
       <AppText soft>
         {t('loads.fleetNow', {
-          container: `${formatDecimal(fleet.containerM3, locale, 1)}\u00a0m³`,
-          payload: `${formatDecimal(fleet.payloadT, locale, 1)}\u00a0t`,
+          container: `${formatDecimal(plan.containerM3, locale, 1)}\u00a0m³`,
+          payload: `${formatDecimal(plan.payloadT, locale, 1)}\u00a0t`,
         })}
       </AppText>
     </Panel>
