@@ -71,7 +71,7 @@ export function DrawDistrictScreen() {
       {districts.isPending ? <Progress label={t('common.loading')} share={null} /> : null}
       {error ? <ProblemNotice error={error} /> : null}
       {from ? (
-        <Panel title={t('rounds.drawMap')}>
+        <Panel title={t('rounds.drawArea')}>
           <Select
             label={t('rounds.drawFrom')}
             value={from.districtId}

@@ -11,7 +11,7 @@ async function drawSquare(page: Page, mapName: string): Promise<void> {
   if (!box) throw new Error('the map has no place on the page')
   const [left, right] = [box.x + box.width * 0.3, box.x + box.width * 0.75]
   // the bar of the drawing lies over the upper part
-  const [top, bottom] = [box.y + box.height * 0.45, box.y + box.height * 0.85]
+  const [top, bottom] = [box.y + box.height * 0.55, box.y + box.height * 0.85]
   for (const [x, y] of [
     [left, top],
     [right, top],
