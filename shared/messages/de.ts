@@ -1,5 +1,36 @@
+import auth from './de/auth.json'
+import bag from './de/bag.json'
+import cautions from './de/cautions.json'
 import common from './de/common.json'
+import loads from './de/loads.json'
+import mail from './de/mail.json'
+import me from './de/me.json'
 import nav from './de/nav.json'
+import publish from './de/publish.json'
+import review from './de/review.json'
+import rounds from './de/rounds.json'
+import stock from './de/stock.json'
+import street from './de/street.json'
+import today from './de/today.json'
+import vocabulary from './de/vocabulary.json'
+import yearsAhead from './de/yearsAhead.json'
 
 /** The German catalogue, in the nesting of the English one. */
-export const de = { common, nav }
+export const de = {
+  auth,
+  bag,
+  cautions,
+  common,
+  loads,
+  mail,
+  me,
+  nav,
+  publish,
+  review,
+  rounds,
+  stock,
+  street,
+  today,
+  vocabulary,
+  yearsAhead,
+}
