@@ -3,10 +3,12 @@ import type { Context } from '@/server/context'
 import { authRoutes } from './auth/authRoutes'
 import { factorBookRoutes } from './factorBook/factorBookRoutes'
 import { healthRoutes } from './health/healthRoutes'
+import { nextLookRoutes } from './nextLook/nextLookRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
 import { publicationRoutes } from './publications/publicationRoutes'
+import { quarantineRoutes } from './quarantine/quarantineRoutes'
 import { reviewRoutes } from './review/reviewRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
 import { runRoutes } from './runs/runRoutes'
@@ -22,9 +24,11 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   roundRoutes,
   syncRoutes,
   photoRoutes,
+  quarantineRoutes,
   reviewRoutes,
   factorBookRoutes,
   runRoutes,
+  nextLookRoutes,
   publicationRoutes,
   yardRoutes,
 ]

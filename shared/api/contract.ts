@@ -2,9 +2,11 @@ import * as auth from './auth'
 import type { Endpoint } from './defineEndpoint'
 import * as factorBook from './factorBook'
 import * as health from './health'
+import * as nextLook from './nextLook'
 import * as outlines from './outlines'
 import * as people from './people'
 import * as publications from './publications'
+import * as quarantine from './quarantine'
 import * as review from './review'
 import * as rounds from './rounds'
 import * as runs from './runs'
@@ -14,9 +16,21 @@ import * as yard from './yard'
 /** Every endpoint of the product, by name: the route table that server, tests and documents walk. */
 export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
   Object.fromEntries(
-    [auth, people, outlines, rounds, sync, review, factorBook, runs, publications, yard, health].flatMap((resource) =>
-      Object.entries(resource).filter(([, value]) => isEndpoint(value)),
-    ),
+    [
+      auth,
+      people,
+      outlines,
+      rounds,
+      sync,
+      quarantine,
+      review,
+      factorBook,
+      runs,
+      publications,
+      yard,
+      nextLook,
+      health,
+    ].flatMap((resource) => Object.entries(resource).filter(([, value]) => isEndpoint(value))),
   ) as Record<string, Endpoint>,
 )
 

@@ -1,8 +1,10 @@
 import { z } from 'zod'
+import { bagFile, devicePublicKey } from '@/shared/schemas/bagFile'
 import { editionForDevice } from '@/shared/schemas/factorBook'
 import { id, moment, typedText } from '@/shared/schemas/primitives'
 import { change, mutationOutcome, PULL_LIMIT, PUSH_LIMIT } from '@/shared/schemas/sync'
 import { defineEndpoint, nothing } from './defineEndpoint'
+import { bagReceipt } from './quarantine'
 
 /**
  * Mutations arrive unparsed: each is judged for itself, so that one bad one is set apart
@@ -68,6 +70,33 @@ export const renewDevice = defineEndpoint({
   query: nothing,
   body: z.object({ deviceId: id, name: typedText(120) }),
   response: z.object({ accessToken: z.string(), expiresInS: z.number().int() }),
+})
+
+/** The key by which a device proves its bag when it has no session any more; its private half never leaves the device. */
+export const enrolDeviceKey = defineEndpoint({
+  method: 'POST',
+  path: '/sync/device-key',
+  audience: ['surveyor'],
+  summary: 'Remember the public key of this device, once.',
+  params: nothing,
+  query: nothing,
+  body: z.object({ deviceId: id, publicKey: devicePublicKey }),
+  response: z.object({ isEnrolled: z.literal(true) }),
+})
+
+/**
+ * For a device or person that is shut out: the signature of the device is the only proof. Nothing of the bag counts until
+ * a steward releases it, and nothing but the receipt comes back.
+ */
+export const surrenderBag = defineEndpoint({
+  method: 'POST',
+  path: '/sync/surrender',
+  audience: 'public',
+  summary: 'Hand a signed bag over to the stewards from a device that is shut out.',
+  params: nothing,
+  query: nothing,
+  body: bagFile,
+  response: bagReceipt,
 })
 
 /** The factor book as the device needs it for the instant estimate. */

@@ -70,7 +70,7 @@ describe('the catalogue', () => {
     expect(current).toEqual({ name: 'tallystone_app' })
   })
 
-  it('opens to the app only the functions that sign-in needs, each with a fixed search path', async () => {
+  it('opens to the app only the functions that sign-in and the nightly job need, each with a fixed search path', async () => {
     const functions = await testApp.owner.rows<{ name: string; is_open: boolean; is_fixed: boolean }>(
       `SELECT p.proname AS name, has_function_privilege('public', p.oid, 'EXECUTE') AS is_open,
          coalesce(array_to_string(p.proconfig, ',') LIKE 'search_path=public%', false) AS is_fixed
@@ -79,11 +79,13 @@ describe('the catalogue', () => {
          AND NOT EXISTS (SELECT FROM pg_depend d WHERE d.objid = p.oid AND d.deptype = 'e') ORDER BY 1`,
     )
     expect(functions).toEqual(
-      ['is_device_of', 'one_time_token_lookup', 'sign_in_lookup', 'signed_in_lookup'].map((name) => ({
-        name,
-        is_open: false,
-        is_fixed: true,
-      })),
+      ['is_device_of', 'one_time_token_lookup', 'organisations_to_tidy', 'sign_in_lookup', 'signed_in_lookup'].map(
+        (name) => ({
+          name,
+          is_open: false,
+          is_fixed: true,
+        }),
+      ),
     )
   })
 })

@@ -162,11 +162,16 @@ export async function assertNothingLost(testApp: TestApp, phones: readonly TestP
        WHERE a.organisation_id = $organisationId`,
       { organisationId },
     )
+    const setApart = await testApp.owner.rows<{ mutation_id: string }>(
+      'SELECT mutation_id FROM quarantine WHERE organisation_id = $organisationId',
+      { organisationId },
+    )
+    const apart = new Set(setApart.map(({ mutation_id }) => mutation_id))
     const byId = new Map(known.map((row) => [row.mutation_id, row]))
     for (const { id } of phone.saved) {
       const row = byId.get(id)
       const isInBag = phone.bag.some((entry) => entry.id === id)
-      if (!row && !isInBag) throw new Error(`mutation ${id} is nowhere`)
+      if (!row && !isInBag && !apart.has(id)) throw new Error(`mutation ${id} is nowhere`)
       if (row && row.outcome !== 'applied' && !row.is_apart) throw new Error(`mutation ${id} was set apart and dropped`)
     }
   }
