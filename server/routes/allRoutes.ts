@@ -3,6 +3,7 @@ import type { Context } from '@/server/context'
 import { authRoutes } from './auth/authRoutes'
 import { factorBookRoutes } from './factorBook/factorBookRoutes'
 import { healthRoutes } from './health/healthRoutes'
+import { nextLookRoutes } from './nextLook/nextLookRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
@@ -27,6 +28,7 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   reviewRoutes,
   factorBookRoutes,
   runRoutes,
+  nextLookRoutes,
   publicationRoutes,
   yardRoutes,
 ]

@@ -1,8 +1,8 @@
 import type { Material } from '@/shared/compute/factors/vocabulary'
 import { computeDistrict, massOfBuilding, type DistrictComputation } from '@/shared/compute/run/computeDistrict'
-import type { LifetimeFigure } from '@/shared/compute/run/resolveArchetype'
 import type { EditionRows } from '@/shared/schemas/factorBook'
-import type { RunBuilding, RunResult, Scenario } from '@/shared/schemas/run'
+import type { RunBuilding, RunResult } from '@/shared/schemas/run'
+import { lifetimesOf } from './lifetimesOf'
 import { presentBasis } from './presentBasis'
 import { presentStock } from './presentStock'
 import { presentYearsAhead } from './presentYearsAhead'
@@ -21,7 +21,7 @@ export function computeRunResult(
 ): ComputedRun {
   const { scenario, surveyYear, sheets } = inputs
   const sliced = sliceBuildings(sheets, scenario)
-  const district = computeDistrict(sliced.buildings, edition.intensities, withOverrides(edition.lifetimes, scenario), {
+  const district = computeDistrict(sliced.buildings, edition.intensities, lifetimesOf(edition.lifetimes, scenario), {
     surveyYear,
     horizonYears: scenario.horizonYears,
     yearOffset: scenario.yearOffset,
@@ -34,16 +34,6 @@ export function computeRunResult(
     },
     buildings: presentBuildings(inputs, sliced, district),
   }
-}
-
-/** A scenario's lifetimes stand before those of the edition: an override of a use is the most specific row. */
-function withOverrides(lifetimes: readonly LifetimeFigure[], { lifetimeOverrides }: Scenario): LifetimeFigure[] {
-  return lifetimes.map((row) => {
-    if (row.component !== 'building') return row
-    const override =
-      lifetimeOverrides.find(({ use }) => use === row.use) ?? lifetimeOverrides.find(({ use }) => use === 'all')
-    return override ? { ...row, model: override.model, meanYears: override.meanYears, sdYears: override.sdYears } : row
-  })
 }
 
 function presentBuildings(

@@ -11,7 +11,10 @@ const VACANCY: Readonly<Record<string, number>> = {
 }
 
 /** Condition, vacancy and protection as one multiplier of the hazard, times the calibration of the scenario. */
-export function hazardMultiplierOf(sheet: RunSheet, scenario: Scenario): number {
+export function hazardMultiplierOf(
+  sheet: Pick<RunSheet, 'condition' | 'vacancy' | 'isProtected'>,
+  scenario: Scenario,
+): number {
   if (!scenario.appliesHazardMultipliers) return scenario.hazardMultiplier
   const { applied } = combinedMultiplier([
     CONDITION[sheet.condition] ?? 1,

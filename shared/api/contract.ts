@@ -2,6 +2,7 @@ import * as auth from './auth'
 import type { Endpoint } from './defineEndpoint'
 import * as factorBook from './factorBook'
 import * as health from './health'
+import * as nextLook from './nextLook'
 import * as outlines from './outlines'
 import * as people from './people'
 import * as publications from './publications'
@@ -27,6 +28,7 @@ export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
       runs,
       publications,
       yard,
+      nextLook,
       health,
     ].flatMap((resource) => Object.entries(resource).filter(([, value]) => isEndpoint(value))),
   ) as Record<string, Endpoint>,

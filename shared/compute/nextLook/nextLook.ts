@@ -1,5 +1,5 @@
 import { districtDoubt, type DistrictDoubt } from './districtDoubt'
-import { expectedFall } from './expectedFall'
+import { expectedFall, meanContribution } from './expectedFall'
 import { kindFigures, type KindBook, type KindConventions } from './kindFigures'
 import {
   LOOK_ATTRIBUTES,
@@ -33,6 +33,8 @@ export interface LookReason {
 export interface Look extends ExpectedFall {
   readonly buildingId: string
   readonly floorAreaM2: number
+  /** Expected contribution to the figure [kg]. */
+  readonly meanKg: number
   /** Of the whole variance of the figure [–]. */
   readonly fallShare: number
   readonly reason: LookReason
@@ -81,6 +83,7 @@ export function nextLook({ figure, buildings, sightings, book, conventions }: Lo
         ...fall,
         buildingId: building.buildingId,
         floorAreaM2: building.floorAreaM2,
+        meanKg: building.floorAreaM2 * meanContribution(building.kinds),
         fallShare: varianceKg2 > 0 ? fall.wholeKg2 / varianceKg2 : 0,
         reason: { narrows: mostTelling(fall), isLarge: building.floorAreaM2 >= largeM2 },
       }
