@@ -6,6 +6,7 @@ import { useTheme } from '@/components/ui/theme/ThemeProvider'
 import type { RoundWithBeats } from '@/shared/api/rounds'
 import { useApi } from '@/sync/react/SessionProvider'
 import { outlinesWithin } from './outlinesWithin'
+import type { PlannedBeat } from './planBeats'
 import { districtBlocksQuery, districtOutlinesQuery } from './roundQueries'
 
 interface RoundMapProps {
@@ -14,10 +15,12 @@ interface RoundMapProps {
   readonly onToggle: (outlineId: string) => void
   /** Adds what lies in a drawn area. */
   readonly onAdd: (outlineIds: readonly string[]) => void
+  /** Beats that are proposed, painted as if they were made. */
+  readonly planned: readonly PlannedBeat[]
 }
 
 /** The frame on the map: free buildings pale, those of a beat in turn light and dark, blocks as lines. */
-export function RoundMap({ round, selectedIds, onToggle, onAdd }: RoundMapProps) {
+export function RoundMap({ round, selectedIds, onToggle, onAdd, planned }: RoundMapProps) {
   const { t } = useMessages()
   const { colours } = useTheme()
   const api = useApi()
@@ -28,16 +31,27 @@ export function RoundMap({ round, selectedIds, onToggle, onAdd }: RoundMapProps)
     [round.buildings],
   )
   const places = useMemo(() => new Map(round.beats.map(({ beatId }, place) => [beatId, place])), [round.beats])
+  const plannedPlaces = useMemo(
+    () =>
+      new Map(
+        planned.flatMap(({ outlineIds }, place) =>
+          outlineIds.map((outlineId) => [outlineId, round.beats.length + place] as const),
+        ),
+      ),
+    [planned, round.beats.length],
+  )
   const paint = useCallback(
     (outlineId: string) => {
+      const fills = [colours.good, colours.selection, colours.attention, colours.action] as const
+      const proposed = plannedPlaces.get(outlineId)
+      if (proposed !== undefined) return { fill: fills[proposed % fills.length]!, opacity: 0.45, outline: colours.rule }
       const beatId = beatOf.get(outlineId)
       if (beatId === undefined) return { fill: colours.ground, opacity: 0.3 }
       if (beatId === null) return { fill: colours.panel, outline: colours.rule }
       const place = places.get(beatId) ?? 0
-      const fills = [colours.good, colours.selection, colours.attention, colours.action] as const
       return { fill: fills[place % fills.length]!, opacity: 0.75, outline: colours.rule }
     },
-    [beatOf, places, colours],
+    [beatOf, places, plannedPlaces, colours],
   )
   const drawn = useMemo(
     () =>

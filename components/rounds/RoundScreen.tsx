@@ -14,6 +14,8 @@ import { BeatForm } from './BeatForm'
 import { BeatTable } from './BeatTable'
 import { BlockList } from './BlockList'
 import { RoundMap } from './RoundMap'
+import { ShareOutPanel } from './ShareOutPanel'
+import type { PlannedBeat } from './planBeats'
 import { roundQuery } from './roundQueries'
 
 /** A round: its coverage, its beats, and the map from which beats are made. */
@@ -45,6 +47,7 @@ function RoundBody({ round }: { readonly round: RoundWithBeats }) {
   const { t } = useMessages()
   const [selectedIds, setSelectedIds] = useState<readonly string[]>([])
   const [edited, setEdited] = useState<Beat | null>(null)
+  const [planned, setPlanned] = useState<readonly PlannedBeat[]>([])
   const { coverage } = round
   const toggle = (outlineIds: readonly string[]) =>
     setSelectedIds((now) => {
@@ -73,6 +76,7 @@ function RoundBody({ round }: { readonly round: RoundWithBeats }) {
       <Panel title={t('rounds.beats')}>
         <BeatTable round={round} onEdit={handleEdit} />
       </Panel>
+      <ShareOutPanel round={round} planned={planned} onPlan={setPlanned} />
       <Panel
         title={edited ? t('rounds.changeBeat', { name: edited.name }) : t('rounds.makeBeat')}
         note={t('rounds.selected', { count: selectedIds.length })}
@@ -81,6 +85,7 @@ function RoundBody({ round }: { readonly round: RoundWithBeats }) {
           round={round}
           selectedIds={selectedIds}
           onToggle={(outlineId) => toggle([outlineId])}
+          planned={planned}
           onAdd={(outlineIds) => setSelectedIds((now) => [...new Set([...now, ...outlineIds])])}
         />
         <BeatForm

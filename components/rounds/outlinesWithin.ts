@@ -1,8 +1,7 @@
 import type { Polygon } from 'geojson'
-import { interiorPoint } from '@/shared/compute/spatial/interiorPoint'
 import { pointInOutline } from '@/shared/compute/spatial/pointInOutline'
-import type { Outline } from '@/shared/compute/spatial/spatial.types'
 import type { AreaGeometry } from '@/shared/schemas/primitives'
+import { innerPoint, outlineOf } from './innerPoint'
 
 interface Placed {
   readonly id: string
@@ -20,13 +19,7 @@ export function outlinesWithin(outlines: readonly Placed[], area: Polygon): stri
   const drawn = outlineOf(area.coordinates)
   return outlines
     .filter(({ geometry }) => {
-      const rings = geometry.type === 'Polygon' ? geometry.coordinates : (geometry.coordinates[0] ?? [])
-      return pointInOutline(interiorPoint(outlineOf(rings)), drawn)
+      return pointInOutline(innerPoint(geometry), drawn)
     })
     .map(({ id }) => id)
-}
-
-function outlineOf(rings: readonly (readonly (readonly number[])[])[]): Outline {
-  const [exterior = [], ...holes] = rings.map((ring) => ring.map(([x = 0, y = 0]) => [x, y] as const))
-  return { exterior, holes }
 }

@@ -28,23 +28,49 @@ export async function saveBeat(
 ): Promise<RoundWithBeats> {
   return database.withScope(actor, async (scope) => {
     await lockRound(scope, roundId)
-    const before = beatId === undefined ? undefined : await readBeat(scope, roundId, beatId)
-    if (wish.surveyorId !== null) await requireSurveyor(scope, wish.surveyorId)
-    const savedId = beatId ?? randomUUID()
-    const moves = await findMoves(scope, { roundId, beatId: savedId, outlineIds: wish.outlineIds })
-    await writeBeat(scope, { beatId: savedId, roundId, name: wish.name, surveyorId: wish.surveyorId })
-    if (before?.surveyor_id !== wish.surveyorId) {
-      await bumpScopeEpoch(scope, [before?.surveyor_id ?? null, wish.surveyorId])
-    }
-    await recordAudit(scope, {
-      action: before ? 'beat-changed' : 'beat-made',
-      subjectType: 'beat',
-      subjectId: savedId,
-      detail: { roundId, surveyorId: wish.surveyorId, movedCount: moves.length },
-    })
-    await moveBuildings(scope, moves, [savedId])
+    await saveOne(scope, { roundId, beatId }, wish)
     return readRound(scope, roundId)
   })
+}
+
+/**
+ * Makes several beats in one transaction: all of them or none.
+ *
+ * @throws {Refusal} `not-found`, `input-not-usable`
+ */
+export async function shareOutBeats(
+  { database }: Pick<Context, 'database'>,
+  actor: Actor,
+  roundId: string,
+  wishes: readonly Wish[],
+): Promise<RoundWithBeats> {
+  return database.withScope(actor, async (scope) => {
+    await lockRound(scope, roundId)
+    for (const wish of wishes) await saveOne(scope, { roundId }, wish)
+    return readRound(scope, roundId)
+  })
+}
+
+async function saveOne(
+  scope: Scope,
+  { roundId, beatId }: { roundId: string; beatId?: string },
+  wish: Wish,
+): Promise<void> {
+  const before = beatId === undefined ? undefined : await readBeat(scope, roundId, beatId)
+  if (wish.surveyorId !== null) await requireSurveyor(scope, wish.surveyorId)
+  const savedId = beatId ?? randomUUID()
+  const moves = await findMoves(scope, { roundId, beatId: savedId, outlineIds: wish.outlineIds })
+  await writeBeat(scope, { beatId: savedId, roundId, name: wish.name, surveyorId: wish.surveyorId })
+  if (before?.surveyor_id !== wish.surveyorId) {
+    await bumpScopeEpoch(scope, [before?.surveyor_id ?? null, wish.surveyorId])
+  }
+  await recordAudit(scope, {
+    action: before ? 'beat-changed' : 'beat-made',
+    subjectType: 'beat',
+    subjectId: savedId,
+    detail: { roundId, surveyorId: wish.surveyorId, movedCount: moves.length },
+  })
+  await moveBuildings(scope, moves, [savedId])
 }
 
 /** One planner at a time shares out the buildings of a round. @throws {Refusal} `not-found` */

@@ -106,6 +106,18 @@ export const createBeat = defineEndpoint({
   status: 201,
 })
 
+export const shareOutBeats = defineEndpoint({
+  method: 'POST',
+  path: '/rounds/:roundId/share-out',
+  audience: ['planner'],
+  summary: 'Make several beats at once: all of them or, on any fault, none.',
+  params: roundId,
+  query: nothing,
+  body: z.object({ beats: z.array(beatBody).min(1).max(60) }),
+  response: roundWithBeats,
+  status: 201,
+})
+
 export const changeBeat = defineEndpoint({
   method: 'PUT',
   path: '/rounds/:roundId/beats/:beatId',

@@ -24,7 +24,7 @@ async function drawSquare(page: Page, mapName: string): Promise<void> {
   await page.getByRole('button', { name: 'Done', exact: true }).click()
 }
 
-story('a planner draws a district, and selects the buildings of a beat by drawing', async ({ appServer, page }) => {
+story('a planner draws a district, selects a beat by drawing, and shares the rest out', async ({ appServer, page }) => {
   await signIn(page, appServer, 'planner')
   await page.getByRole('link', { name: 'Rounds' }).click()
   await page.getByRole('button', { name: 'Draw a district' }).click()
@@ -50,4 +50,13 @@ story('a planner draws a district, and selects the buildings of a beat by drawin
   await expect(page.getByText(/\d+ buildings selected/)).not.toHaveText('0 buildings selected')
   await page.getByRole('button', { name: 'Make a beat' }).click()
   await expect(page.getByText('Beat 1 is kept.')).toBeVisible()
+
+  await page.getByRole('textbox', { name: 'Beats' }).fill('3')
+  await page.getByRole('button', { name: 'Propose beats' }).click()
+  const proposal = page.getByRole('table', { name: 'Proposed beats' })
+  await expect(proposal.getByText('Beat 4')).toBeVisible()
+  await page.getByRole('checkbox', { name: appServer.account('surveyor').name }).click()
+  await page.getByRole('button', { name: 'Make these 3 beats' }).click()
+  await expect(page.getByText('3 beats are made.')).toBeVisible()
+  await expect(page.getByText('Share out what has no beat')).toBeHidden()
 })

@@ -1,7 +1,7 @@
 import { Router } from 'express'
 import { createRound } from '@/server/commands/createRound'
 import { removeBeat } from '@/server/commands/removeBeat'
-import { saveBeat } from '@/server/commands/saveBeat'
+import { saveBeat, shareOutBeats } from '@/server/commands/saveBeat'
 import type { Context } from '@/server/context'
 import { readRound } from '@/server/queries/readRound'
 import { readRounds } from '@/server/queries/readRounds'
@@ -26,6 +26,10 @@ export function roundRoutes(context: Context): Router {
   )
 
   mount(router, endpoints.createBeat, ({ signedIn, params, body }) => saveBeat(context, signedIn, params, body))
+
+  mount(router, endpoints.shareOutBeats, ({ signedIn, params, body }) =>
+    shareOutBeats(context, signedIn, params.roundId, body.beats),
+  )
 
   mount(router, endpoints.changeBeat, ({ signedIn, params, body }) => saveBeat(context, signedIn, params, body))
 
