@@ -129,3 +129,30 @@ describe('createFieldStore', () => {
     expect(fileName).toBe('bag-2026-10-13T1408.json')
   })
 })
+
+describe('where to look next', () => {
+  it('is empty until the server has told, and is kept on the device', async () => {
+    const { field, sync } = await phoneWithBeat()
+    expect(await field.readNextLooks()).toEqual([])
+
+    const list = {
+      roundId: BUILDING_ID,
+      figure: { material: 'timber', byYear: 2040 },
+      runNumber: 3,
+      rankedAt: '2026-11-30T12:00:00.000Z',
+      roundCount: 9,
+      looks: [
+        {
+          buildingId: BUILDING_ID,
+          rank: 2,
+          fallShare: 0.1,
+          reason: { narrows: 'structure', isLarge: true },
+          isRecorded: false,
+        },
+      ],
+    } as const
+    await sync.keepNextLooks([{ ...list, looks: [...list.looks] }])
+
+    expect(await field.readNextLooks()).toEqual([list])
+  })
+})

@@ -1,4 +1,5 @@
 import { editionForDevice } from '@/shared/schemas/factorBook'
+import { deviceLooksList } from '@/shared/schemas/nextLook'
 import type { PhotoMeta, SheetAnswers } from '@/shared/schemas/sheet'
 import { appendMutation, type Stamp } from './appendMutation'
 import type { Driver, Statements } from './driver.types'
@@ -51,6 +52,10 @@ export function createFieldStore({ driver, photoFiles, stamp, changed, subscribe
     async readEdition() {
       const text = await readMeta(driver, 'edition')
       return text === null ? null : editionForDevice.parse(JSON.parse(text))
+    },
+    async readNextLooks() {
+      const text = await readMeta(driver, 'nextLook')
+      return text === null ? [] : deviceLooksList.parse(JSON.parse(text))
     },
   }
 }

@@ -65,6 +65,7 @@ export function createSyncStore({ driver, photoFiles, now, changed, subscribe }:
         inside.run('UPDATE photo SET place = ?, refusal = ? WHERE photo_id = ?', [place, refusal, photoId]),
       ),
     keepEdition: (edition) => write((inside) => writeMeta(inside, 'edition', JSON.stringify(edition))),
+    keepNextLooks: (lists) => write((inside) => writeMeta(inside, 'nextLook', JSON.stringify(lists))),
   }
 }
 

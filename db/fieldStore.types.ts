@@ -1,4 +1,5 @@
 import type { EditionForDevice } from '@/shared/schemas/factorBook'
+import type { DeviceLooks } from '@/shared/schemas/nextLook'
 import type { DeviceSheetState, PhotoMeta, SheetAnswers } from '@/shared/schemas/sheet'
 import type { BeatEntity, BuildingEntity, ConflictEntity, PhotoEntity, SheetEntity } from '@/shared/schemas/sync'
 import type { Problem } from '@/shared/schemas/problem'
@@ -27,6 +28,8 @@ export interface FieldStore {
   /** Everything that is not yet confirmed, as one JSON text with its digest, for a file. */
   exportBag(): Promise<{ fileName: string; json: string }>
   readEdition(): Promise<EditionForDevice | null>
+  /** Where to look next, by round; empty until the server has told. */
+  readNextLooks(): Promise<readonly DeviceLooks[]>
   /** Called after every change of any of the above. */
   subscribe(listener: () => void): () => void
 }

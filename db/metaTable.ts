@@ -4,6 +4,8 @@ export type MetaName =
   | 'nextSeq'
   | 'cursor'
   | 'edition'
+  /** Where to look next, by round. */
+  | 'nextLook'
   | 'lastHandedInAt'
   | 'scopeEpoch'
   | 'deviceId'

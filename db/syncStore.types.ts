@@ -1,4 +1,5 @@
 import type { EditionForDevice } from '@/shared/schemas/factorBook'
+import type { DeviceLooks } from '@/shared/schemas/nextLook'
 import type { PhotoMeta } from '@/shared/schemas/sheet'
 import type { Change, MutationOutcome } from '@/shared/schemas/sync'
 import type { Problem } from '@/shared/schemas/problem'
@@ -34,6 +35,8 @@ export interface SyncStore {
   readPhotoBytes(sha256: string): Promise<Uint8Array | null>
   markPhoto(photoId: string, place: 'sent' | 'refused', refusal: string | null): Promise<void>
   keepEdition(edition: EditionForDevice): Promise<void>
+  /** Takes the place of the lists before. */
+  keepNextLooks(lists: readonly DeviceLooks[]): Promise<void>
   subscribe(listener: () => void): () => void
 }
 

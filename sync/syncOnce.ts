@@ -1,3 +1,4 @@
+import { readDeviceLooks } from '@/shared/api/nextLook'
 import { readDeviceEdition } from '@/shared/api/sync'
 import type { SyncStore } from '@/db/syncStore.types'
 import { ApiError } from './api/ApiError'
@@ -18,7 +19,7 @@ export interface SyncParts {
 }
 
 /**
- * Everything once: push, pull, the edition, photos; then push and pull again if anything came into the bag or into view
+ * Everything once: push, pull, the edition and where to look next, photos; then push and pull again if anything came into the bag or into view
  * meanwhile. An app too old to push still pulls (P12).
  *
  * @throws {ApiError} the server refused
@@ -27,6 +28,7 @@ export interface SyncParts {
 export async function syncOnce(parts: SyncParts, signal?: AbortSignal): Promise<void> {
   await pushAndPull(parts, signal)
   const editionFault = parts.isEditionDue ? await fetchEdition(parts, signal) : null
+  if (parts.isEditionDue) await fetchNextLooks(parts, signal)
   const { photos } = await parts.store.countWaiting()
   await uploadPhotos({ ...parts, onProgress: progressOf(parts, 'sending-photos') }, signal)
   const { unanswered } = await parts.store.countWaiting()
@@ -63,5 +65,14 @@ async function fetchEdition({ store, api }: SyncParts, signal?: AbortSignal): Pr
     if (!(error instanceof ApiError)) throw error
     // no edition is issued yet: the sheets need none
     return error.status === 404 ? null : error
+  }
+}
+
+/** Where to look next is advice: a server that refuses it holds nothing up, and the list before stays. */
+async function fetchNextLooks({ store, api }: SyncParts, signal?: AbortSignal): Promise<void> {
+  try {
+    await store.keepNextLooks((await api.call(readDeviceLooks, {}, signal)).rounds)
+  } catch (error) {
+    if (!(error instanceof ApiError)) throw error
   }
 }

@@ -18,9 +18,11 @@ import { DEVICE_SHEET_STATES } from '@/shared/schemas/sheet'
 import { formatDistance } from '@/shared/format'
 import { useStored } from '@/sync/react/FieldProvider'
 import { BuildingList } from './BuildingList'
+import { lookPaint, LOOK_SHADES } from './lookShade'
 import { fitsSearch, orderBuildings } from './orderBuildings'
 import { PaintMark } from './PaintMark'
 import { statePaint } from './statePaint'
+import { useLookShades } from './useLookShades'
 import { useOwnPosition } from './useOwnPosition'
 import { WalkCaution } from './WalkCaution'
 
@@ -173,12 +175,26 @@ function BeatMap({ label, beatId, buildings, position, onOpenSheet }: BeatMapPro
       })),
     [buildings],
   )
-  const paint = useCallback((id: string) => statePaint(stateOf.get(id) ?? 'to-do', colours), [stateOf, colours])
-  const entries = DEVICE_SHEET_STATES.map((state) => ({
+  const shades = useLookShades(buildings)
+  const paint = useCallback(
+    (id: string) => {
+      const state = stateOf.get(id) ?? 'to-do'
+      const shade = state === 'to-do' ? shades.get(id) : undefined
+      return shade ? lookPaint(shade, colours) : statePaint(state, colours)
+    },
+    [stateOf, shades, colours],
+  )
+  const lookEntries = LOOK_SHADES.map((shade) => ({
+    key: shade,
+    label: t(`nextLook.${shade}`),
+    mark: <PaintMark paint={lookPaint(shade, colours)} />,
+  }))
+  const stateEntries = DEVICE_SHEET_STATES.map((state) => ({
     key: state,
     label: t(`vocabulary.state.${state}`),
     mark: <PaintMark paint={statePaint(state, colours)} />,
   }))
+  const entries = shades.size > 0 ? [...lookEntries, ...stateEntries] : stateEntries
   return (
     <OutlineMap
       label={label}

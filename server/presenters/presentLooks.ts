@@ -32,8 +32,10 @@ export function presentLooks({ looks }: NextLooks, rows: readonly LookRow[]): Ra
 
 /** Of a whole round's list, what lies on the beats of one device. */
 export function presentDeviceLooks(looks: readonly RankedLook[], beatIds: ReadonlySet<string>): DeviceLooks['looks'] {
-  return looks.flatMap(({ buildingId, beatId, fallShare, reason }, place) =>
-    beatId !== null && beatIds.has(beatId) ? [{ buildingId, rank: place + 1, fallShare, reason }] : [],
+  return looks.flatMap(({ buildingId, beatId, fallShare, reason, state }, place) =>
+    beatId !== null && beatIds.has(beatId)
+      ? [{ buildingId, rank: place + 1, fallShare, reason, isRecorded: state !== 'to-do' }]
+      : [],
   )
 }
 

@@ -13,6 +13,7 @@ import loads from './en/loads.json'
 import mail from './en/mail.json'
 import me from './en/me.json'
 import nav from './en/nav.json'
+import nextLook from './en/nextLook.json'
 import notices from './en/notices.json'
 import outlines from './en/outlines.json'
 import people from './en/people.json'
@@ -44,6 +45,7 @@ export const en = {
   mail,
   me,
   nav,
+  nextLook,
   notices,
   outlines,
   people,

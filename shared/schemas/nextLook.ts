@@ -53,8 +53,11 @@ export const deviceLooks = z.object({
       rank: z.number().int(),
       fallShare: z.number(),
       reason: lookReason,
+      /** It had a sheet when the list was made: looked at, and still in doubt. */
+      isRecorded: z.boolean(),
     }),
   ),
 })
 export const deviceLooksList = z.array(deviceLooks)
+export type DeviceLook = DeviceLooks['looks'][number]
 export type DeviceLooks = z.infer<typeof deviceLooks>

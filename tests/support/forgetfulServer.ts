@@ -1,3 +1,4 @@
+import { readDeviceLooks } from '@/shared/api/nextLook'
 import { pullChanges, pushMutations, readDeviceEdition, renewDevice } from '@/shared/api/sync'
 import type { Endpoint, EndpointReply } from '@/shared/api/defineEndpoint'
 import { mutation, type Change, type MutationOutcome } from '@/shared/schemas/sync'
@@ -65,6 +66,7 @@ export class ForgetfulServer {
     if (endpoint.path === renewDevice.path) this.enrolled.push(renewDevice.body.parse(input.body).deviceId)
     if (endpoint.path === renewDevice.path) return { accessToken: 'renewed', expiresInS: 600 }
     if (endpoint.path === readDeviceEdition.path) throw refusal(404, 'not-found')
+    if (endpoint.path === readDeviceLooks.path) return { rounds: [] }
     throw new UnreachableError(`${endpoint.path} is not served here`)
   }
 
