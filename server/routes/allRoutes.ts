@@ -9,6 +9,7 @@ import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
 import { publicationRoutes } from './publications/publicationRoutes'
 import { quarantineRoutes } from './quarantine/quarantineRoutes'
+import { receiptRoutes } from './receipts/receiptRoutes'
 import { reviewRoutes } from './review/reviewRoutes'
 import { roundRoutes } from './rounds/roundRoutes'
 import { runRoutes } from './runs/runRoutes'
@@ -29,6 +30,7 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   factorBookRoutes,
   runRoutes,
   nextLookRoutes,
+  receiptRoutes,
   publicationRoutes,
   yardRoutes,
 ]

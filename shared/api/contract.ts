@@ -7,6 +7,7 @@ import * as outlines from './outlines'
 import * as people from './people'
 import * as publications from './publications'
 import * as quarantine from './quarantine'
+import * as receipts from './receipts'
 import * as review from './review'
 import * as rounds from './rounds'
 import * as runs from './runs'
@@ -29,6 +30,7 @@ export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
       publications,
       yard,
       nextLook,
+      receipts,
       health,
     ].flatMap((resource) => Object.entries(resource).filter(([, value]) => isEndpoint(value))),
   ) as Record<string, Endpoint>,
