@@ -32,7 +32,9 @@ export async function appendUpload(
       await lockUpload(scope, photoId)
       const found = await readUploadPhoto(scope, photoId)
       if (found.state === 'stored' || found.state === 'refused') return { photo: found, offset: found.bytes }
-      return { photo: found, offset: await write(parts, actor, found, chunk) }
+      const offset = await write(parts, actor, found, chunk)
+      await noteUpload(scope, photoId, parts.now())
+      return { photo: found, offset }
     }),
   )
   if (photo.state === 'stored' || photo.state === 'refused') return { state: photo.state, offset }
@@ -46,6 +48,14 @@ async function lockUpload(scope: Scope, photoId: string): Promise<void> {
   await scope.select('SELECT pg_advisory_xact_lock(hashtextextended($name, 0))', {
     name: `${scope.organisationId}/${photoId}`,
   })
+}
+
+/** After the disk, so that the row is not held while it writes. */
+async function noteUpload(scope: Scope, photoId: string, now: Date): Promise<void> {
+  await scope.execute(
+    'UPDATE photo SET upload_at = $now WHERE organisation_id = $organisationId AND photo_id = $photoId',
+    { organisationId: scope.organisationId, photoId, now },
+  )
 }
 
 async function write(

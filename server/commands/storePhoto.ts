@@ -7,7 +7,7 @@ import { judgePhoto } from '@/server/photos/judgePhoto'
 import { readUploadPhoto, type UploadPhoto } from '@/server/queries/readUploadPhoto'
 import { takeChangeNumbers } from './takeChangeNumbers'
 
-export type PhotoParts = Pick<Context, 'database' | 'photoStore' | 'log'> & { readonly decoder: PhotoDecoder }
+export type PhotoParts = Pick<Context, 'database' | 'photoStore' | 'log' | 'now'> & { readonly decoder: PhotoDecoder }
 
 /**
  * Ends an upload whose bytes are all there: whole digest, content, storing, and a change number for the new state
@@ -72,7 +72,7 @@ async function refuse(
 async function setState(scope: Scope, photoId: string, { sql, bind }: { sql: string; bind: object }): Promise<void> {
   const change = await takeChangeNumbers(scope, 1)
   await scope.execute(
-    `UPDATE photo SET ${sql}, change_no = $change
+    `UPDATE photo SET ${sql}, change_no = $change, upload_at = NULL
      WHERE organisation_id = $organisationId AND photo_id = $photoId AND state IN ('declared', 'partial')`,
     { ...bind, organisationId: scope.organisationId, photoId, change },
   )
