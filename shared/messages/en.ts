@@ -18,6 +18,7 @@ import notices from './en/notices.json'
 import outlines from './en/outlines.json'
 import people from './en/people.json'
 import publish from './en/publish.json'
+import receipts from './en/receipts.json'
 import review from './en/review.json'
 import rounds from './en/rounds.json'
 import runs from './en/runs.json'
@@ -50,6 +51,7 @@ export const en = {
   outlines,
   people,
   publish,
+  receipts,
   review,
   rounds,
   runs,

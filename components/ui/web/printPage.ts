@@ -1,0 +1,2 @@
+/** Only a browser prints the page it shows. */
+export const printPage: (() => void) | null = null
