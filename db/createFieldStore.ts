@@ -4,27 +4,37 @@ import type { PhotoMeta, SheetAnswers } from '@/shared/schemas/sheet'
 import { appendMutation, type Stamp } from './appendMutation'
 import type { Driver, Statements } from './driver.types'
 import { exportBag } from './exportBag'
-import type { FieldStore, StoredPhoto, StoredSheet } from './fieldStore.types'
+import { NoRoomForPhotosError, type FieldStore, type StoredPhoto, type StoredSheet } from './fieldStore.types'
+import { listConflicts, settleConflict } from './fieldConflicts'
+import type { BagOwner } from './makeBagFile'
 import { readMeta } from './metaTable'
 import type { PhotoFiles } from './photoFiles.types'
 import { readBag } from './readBag'
 import { readBuildings } from './readBuildings'
 import { readColumn, type BaseRow, type DraftRow, type OutboxRow, type PhotoRow } from './rows'
+import { saveSafely } from './saveSafely'
 import { changedGroups, standingAnswers } from './standingAnswers'
+import type { StorageRoom } from './storageRoom'
+import type { Twin } from './twin.types'
 
 export interface FieldStoreParts {
   readonly driver: Driver
   readonly photoFiles: PhotoFiles
   readonly stamp: Stamp
+  readonly twin: Twin
+  readonly owner: BagOwner
+  readonly readRoom: () => Promise<Pick<StorageRoom, 'level'>>
   /** Tells all listeners of this database. */
   readonly changed: () => void
   readonly subscribe: (listener: () => void) => () => void
 }
 
 /** The device's database as a surveyor uses it. */
-export function createFieldStore({ driver, photoFiles, stamp, changed, subscribe }: FieldStoreParts): FieldStore {
-  const write = async <Result>(work: (inside: Statements) => Promise<Result>): Promise<Result> => {
-    const result = await driver.transaction(work)
+export function createFieldStore(parts: FieldStoreParts): FieldStore {
+  const { driver, photoFiles, stamp, twin, owner, changed, subscribe } = parts
+  const save = saveSafely(driver, twin, stamp)
+  const write = async <Result>(work: Parameters<typeof save<Result>>[0]): Promise<Result> => {
+    const result = await save(work)
     changed()
     return result
   }
@@ -38,17 +48,20 @@ export function createFieldStore({ driver, photoFiles, stamp, changed, subscribe
     readBuilding: async (buildingId) => (await readBuildings(driver, 'building_id = ?', buildingId))[0] ?? null,
     readSheet: (buildingId) => readSheet(driver, buildingId),
     keepDraft: (buildingId, draft) => write((inside) => keepDraft(inside, buildingId, draft, stamp)),
-    putInBag: (buildingId) => write((inside) => putInBag(inside, buildingId, stamp)),
+    putInBag: (buildingId) => write((inside, own) => putInBag(inside, buildingId, own)),
     async addPhoto(photo, bytes) {
+      if ((await parts.readRoom()).level === 'full') throw new NoRoomForPhotosError()
       // the bytes first: a photo without its bytes must never be in the bag
       await photoFiles.write(photo.sha256, bytes)
-      await write((inside) => addPhoto(inside, photo, stamp))
+      await write((inside, own) => addPhoto(inside, photo, own))
     },
-    removePhoto: (photoId) => write((inside) => removePhoto(inside, photoId, stamp)),
+    removePhoto: (photoId) => write((inside, own) => removePhoto(inside, photoId, own)),
     listPhotos: (sheetId) => listPhotos(driver, sheetId),
     readPhotoBytes: (sha256) => photoFiles.read(sha256),
     readBag: () => readBag(driver),
-    exportBag: () => exportBag(driver, stamp.now()),
+    exportBag: () => exportBag(driver, owner, stamp.now()),
+    listConflicts: () => listConflicts(driver),
+    settleConflict: (conflictId, choice) => write((inside, own) => settleConflict(inside, { conflictId, choice }, own)),
     async readEdition() {
       const text = await readMeta(driver, 'edition')
       return text === null ? null : editionForDevice.parse(JSON.parse(text))

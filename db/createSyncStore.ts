@@ -4,21 +4,31 @@ import type { SheetAnswers } from '@/shared/schemas/sheet'
 import { syncDigest } from '@/shared/sync/syncDigest'
 import { applyPage } from './applyPage'
 import type { Driver, Statements } from './driver.types'
+import { evictPhotos } from './evictPhotos'
+import { makeBagFile, type BagOwner } from './makeBagFile'
+import { markSurrendered } from './markSurrendered'
 import { readMeta, removeMeta, writeMeta } from './metaTable'
+import { idsToKeep } from './openWithTwin'
 import type { PhotoFiles } from './photoFiles.types'
 import { readColumn, type DraftRow, type OutboxRow, type PhotoRow } from './rows'
+import type { StorageRoom } from './storageRoom'
 import type { SyncStore, WaitingMutation } from './syncStore.types'
+import type { Twin } from './twin.types'
 
 export interface SyncStoreParts {
   readonly driver: Driver
   readonly photoFiles: PhotoFiles
+  readonly twin: Twin
+  readonly owner: BagOwner
+  readonly readRoom: () => Promise<Pick<StorageRoom, 'level'>>
   readonly now: () => Date
   readonly changed: () => void
   readonly subscribe: (listener: () => void) => () => void
 }
 
 /** The device's database as handing in uses it. */
-export function createSyncStore({ driver, photoFiles, now, changed, subscribe }: SyncStoreParts): SyncStore {
+export function createSyncStore(parts: SyncStoreParts): SyncStore {
+  const { driver, photoFiles, twin, owner, now, changed, subscribe } = parts
   const write = async (work: (inside: Statements) => Promise<void>): Promise<void> => {
     await driver.transaction(work)
     changed()
@@ -41,7 +51,19 @@ export function createSyncStore({ driver, photoFiles, now, changed, subscribe }:
       return ofRebuild === null ? readMeta(driver, 'cursor') : ofRebuild || null
     },
     applyPage: (page) => write((inside) => applyPage(inside, page)),
-    dropConfirmed: (ackSeq, at) => write((inside) => dropConfirmed(inside, ackSeq, at)),
+    async dropConfirmed(ackSeq, at) {
+      await write((inside) => dropConfirmed(inside, ackSeq, at))
+      // what the twin holds too much is handed in once more at worst, and known there by its id
+      await twin.keepOnly(await idsToKeep(driver)).catch(() => undefined)
+    },
+    async evictPhotos() {
+      return (await parts.readRoom()).level === 'roomy' ? 0 : evictPhotos(driver, photoFiles)
+    },
+    makeBagFile: () => makeBagFile(driver, owner, now()),
+    markSurrendered: (sha256) => write((inside) => markSurrendered(inside, sha256, now())),
+    readSurrendered: () => readMeta(driver, 'surrenderedAt'),
+    isKeyEnrolled: async (deviceId) => (await readMeta(driver, 'keyEnrolledFor')) === deviceId,
+    noteKeyEnrolled: (deviceId) => driver.transaction((inside) => writeMeta(inside, 'keyEnrolledFor', deviceId)),
     async baseDigest() {
       return syncDigest(await driver.all<{ id: string; change: number }>('SELECT id, change_no AS change FROM base'))
     },

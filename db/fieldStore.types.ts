@@ -19,14 +19,21 @@ export interface FieldStore {
    * @throws {Error} with the fault of the disk; the draft is untouched then
    */
   putInBag(buildingId: string): Promise<void>
-  /** Takes a photo into the device: bytes by digest, meta and outbox mutation in one transaction. */
+  /**
+   * Takes a photo into the device: bytes by digest, meta and outbox mutation in one transaction.
+   * @throws {NoRoomForPhotosError} what room there is stays for records
+   */
   addPhoto(photo: PhotoMeta, bytes: Uint8Array): Promise<void>
   removePhoto(photoId: string): Promise<void>
   listPhotos(sheetId: string): Promise<readonly StoredPhoto[]>
   readPhotoBytes(sha256: string): Promise<Uint8Array | null>
   readBag(): Promise<BagContents>
-  /** Everything that is not yet confirmed, as one JSON text with its digest, for a file. */
+  /** Everything that is not yet confirmed, as one JSON text with its digest and signature, for a file. */
   exportBag(): Promise<{ fileName: string; json: string }>
+  /** Pairs of answers between which nobody has chosen yet, here or at the desk. */
+  listConflicts(): Promise<readonly StoredConflict[]>
+  /** Puts a choice in the bag; does nothing for a conflict that is settled or has a choice in the bag. */
+  settleConflict(conflictId: string, choice: 'kept' | 'set-aside'): Promise<void>
   readEdition(): Promise<EditionForDevice | null>
   /** Where to look next, by round; empty until the server has told. */
   readNextLooks(): Promise<readonly DeviceLooks[]>
@@ -58,6 +65,22 @@ export interface StoredSheet {
   /** Revision this draft will become: 1, 2, 3 … */
   readonly nextRevision: number
   readonly conflicts: readonly (ConflictEntity & { readonly conflictId: string })[]
+}
+
+/** Two answers to one question; what lost was set aside until a person chooses. */
+export interface StoredConflict extends ConflictEntity {
+  readonly conflictId: string
+  /** Reference and address of the building. */
+  readonly label: string
+}
+
+/** So little space is left on the device that photos would take that of records. */
+export class NoRoomForPhotosError extends Error {
+  override readonly name = 'NoRoomForPhotosError'
+
+  constructor() {
+    super('less than 5 % of the space is left; it is kept for sheets. Hand in to free space, then take the photo again')
+  }
 }
 
 export interface StoredPhoto {

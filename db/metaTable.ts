@@ -13,6 +13,12 @@ export type MetaName =
   | 'rebuildCursor'
   /** Set from the wish for another device id until the bag is numbered for it. */
   | 'isRenewing'
+  /** Set once the twin of the bag was read into this database. */
+  | 'isTwinned'
+  /** Device id whose public key the server knows. */
+  | 'keyEnrolledFor'
+  /** When the bag was handed over to the stewards by a device that is shut out. */
+  | 'surrenderedAt'
 
 export async function readMeta(inside: Statements, name: MetaName): Promise<string | null> {
   const [row] = await inside.all<{ value: string }>('SELECT value FROM meta WHERE name = ?', [name])

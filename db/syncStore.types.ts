@@ -1,3 +1,4 @@
+import type { BagFile } from '@/shared/schemas/bagFile'
 import type { EditionForDevice } from '@/shared/schemas/factorBook'
 import type { DeviceLooks } from '@/shared/schemas/nextLook'
 import type { PhotoMeta } from '@/shared/schemas/sheet'
@@ -37,6 +38,16 @@ export interface SyncStore {
   keepEdition(edition: EditionForDevice): Promise<void>
   /** Takes the place of the lists before. */
   keepNextLooks(lists: readonly DeviceLooks[]): Promise<void>
+  /** Where space runs short: bytes of photos that the server has stored leave the device. @returns how many */
+  evictPhotos(): Promise<number>
+  /** Everything that only this phone holds, sealed. */
+  makeBagFile(): Promise<BagFile>
+  /** After a receipt: what waited is set apart here, and what was pulled leaves the device. */
+  markSurrendered(sha256: string): Promise<void>
+  /** When the bag was handed over; null when it was not, or work came since. */
+  readSurrendered(): Promise<string | null>
+  isKeyEnrolled(deviceId: string): Promise<boolean>
+  noteKeyEnrolled(deviceId: string): Promise<void>
   subscribe(listener: () => void): () => void
 }
 

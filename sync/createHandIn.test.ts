@@ -25,6 +25,10 @@ async function setting(): Promise<Setting> {
     renewDeviceId: () => (deviceId = phone.nextId()),
     adoptToken: () => {},
     deviceName: 'test phone',
+    publicKey: phone.publicKey,
+    sendSurrender: async () => {
+      throw new Error('nobody is shut out here')
+    },
     now: () => new Date('2026-10-13T14:08:00Z'),
     random: () => 0.5,
     later: (work) => {

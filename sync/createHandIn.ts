@@ -1,8 +1,11 @@
+import type { DevicePublicKey } from '@/shared/schemas/bagFile'
 import type { SyncStore } from '@/db/syncStore.types'
 import type { ApiClient } from './api/createApiClient'
+import { enrolKey } from './enrolKey'
 import { finishRenewal } from './finishRenewal'
 import type { HandIn, HandInState } from './handIn.types'
-import { retryDelayMs } from './retryDelayMs'
+import { retryAfterMs, retryDelayMs } from './retryDelayMs'
+import { isShutOut, surrenderBag, type SendSurrender } from './surrenderBag'
 import { syncOnce } from './syncOnce'
 import { needsPerson, whyStopped } from './whyStopped'
 
@@ -12,6 +15,10 @@ export interface HandInParts {
   readonly deviceId: () => string
   readonly renewDeviceId: () => string
   readonly deviceName: string
+  /** Null where the platform keeps no key for the device. */
+  readonly publicKey: DevicePublicKey | null
+  /** Hands a sealed bag over without a session. */
+  readonly sendSurrender: SendSurrender
   /** The session goes on with this token under the new device id. */
   readonly adoptToken: (accessToken: string) => void
   readonly now: () => Date
@@ -65,6 +72,8 @@ export function createHandIn(parts: HandInParts): RunningHandIn {
     const onProgress = (phase: HandInState['phase'], done: number, total: number) => setState({ phase, done, total })
     await syncOnce({ store, api, deviceId, enrolAnew, now, isEditionDue, onProgress }, stopping.signal)
     if (isEditionDue) editionDueMs = now().getTime() + EDITION_MS
+    await enrolKey(parts, stopping.signal)
+    await store.evictPhotos()
   }
   const plan = (delayMs: number) => {
     cancelTimer()
@@ -83,11 +92,13 @@ export function createHandIn(parts: HandInParts): RunningHandIn {
     } catch (error) {
       if (stopping.signal.aborted) return
       failures += 1
-      const stoppedBecause = whyStopped(error)
+      const isHandedOver = isShutOut(error) && (await surrenderBag(parts, stopping.signal))
+      const stoppedBecause = isHandedOver ? 'surrendered' : whyStopped(error)
       const network = stoppedBecause === 'no-network' ? 'not-reached' : 'reached'
       const phase = needsPerson(stoppedBecause) ? 'resting' : 'waiting-to-retry'
       setState({ phase, network, stoppedBecause })
-      plan(needsPerson(stoppedBecause) ? POLL_MS : Math.max(500, retryDelayMs(failures, random())))
+      const delayMs = needsPerson(stoppedBecause) ? POLL_MS : Math.max(500, retryDelayMs(failures, random()))
+      plan(Math.max(delayMs, retryAfterMs(error, random())))
     }
   }
   const handIn = (): Promise<void> => {

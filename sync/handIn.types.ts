@@ -7,7 +7,14 @@ export interface HandInState {
   readonly network: 'reached' | 'not-reached' | 'not-tried'
   /** Message key below `bag.` for why it stopped, or null. */
   readonly stoppedBecause:
-    'no-network' | 'sign-in-again' | 'device-revoked' | 'upgrade-required' | 'server-fault' | 'device-full' | null
+    | 'no-network'
+    | 'sign-in-again'
+    | 'device-revoked'
+    | 'surrendered'
+    | 'upgrade-required'
+    | 'server-fault'
+    | 'device-full'
+    | null
   readonly lastSyncedAt: string | null
   readonly nextTryAt: string | null
 }

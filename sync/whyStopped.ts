@@ -1,3 +1,4 @@
+import { isDiskFull } from '@/db/isDiskFull'
 import { ApiError, UnreachableError } from './api/ApiError'
 import type { HandInState } from './handIn.types'
 
@@ -10,11 +11,15 @@ export function whyStopped(error: unknown): NonNullable<HandInState['stoppedBeca
     if (error.status === 426) return 'upgrade-required'
     return 'server-fault'
   }
-  const name = error instanceof Error ? `${error.name} ${error.message}` : ''
-  return /quota|disk is full|SQLITE_FULL/i.test(name) ? 'device-full' : 'server-fault'
+  return isDiskFull(error) ? 'device-full' : 'server-fault'
 }
 
 /** Reasons that time alone does not mend: trying again waits for the person. */
 export function needsPerson(reason: HandInState['stoppedBecause']): boolean {
-  return reason === 'sign-in-again' || reason === 'device-revoked' || reason === 'upgrade-required'
+  return (
+    reason === 'sign-in-again' ||
+    reason === 'device-revoked' ||
+    reason === 'surrendered' ||
+    reason === 'upgrade-required'
+  )
 }

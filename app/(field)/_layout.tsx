@@ -12,6 +12,8 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { FieldProvider } from '@/sync/react/FieldProvider'
 import { useAccount, useSession } from '@/sync/react/SessionProvider'
 
+export { FieldFault as ErrorBoundary } from '@/components/field/FieldFault'
+
 export default function FieldLayout() {
   const { account } = useSession()
   if (!account) return <Redirect href="/sign-in" />

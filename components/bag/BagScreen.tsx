@@ -10,6 +10,7 @@ import { downloadText } from '@/components/ui/web/downloadText'
 import type { BagContents, FieldStore } from '@/db/fieldStore.types'
 import { formatBytes, formatDate } from '@/shared/format'
 import { useField, useHandInState, useStored } from '@/sync/react/FieldProvider'
+import { ConflictsPanel } from './ConflictsPanel'
 import { HandInStatus } from './HandInStatus'
 import { RefusedPanel } from './RefusedPanel'
 import { SpacePanel } from './SpacePanel'
@@ -39,6 +40,7 @@ export function BagScreen({ onOpenSheet, onSignIn }: BagScreenProps) {
     >
       <HandInStatus onSignIn={onSignIn} />
       <RefusedPanel quarantined={bag.quarantined} onOpenSheet={onOpenSheet} />
+      <ConflictsPanel />
       <WaitingPanel bag={bag} onOpenSheet={onOpenSheet} />
       <SpacePanel />
       <CopyPanel />

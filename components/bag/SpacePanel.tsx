@@ -2,24 +2,19 @@ import { useCallback, useEffect, useState } from 'react'
 import { AppText } from '@/components/ui/AppText'
 import { Button } from '@/components/ui/Button'
 import { useMessages } from '@/components/ui/MessagesProvider'
+import { Notice } from '@/components/ui/Notice'
 import { Panel } from '@/components/ui/Panel'
 import { Progress } from '@/components/ui/Progress'
+import { readStorageRoom, type StorageRoom } from '@/db/storageRoom'
 import { formatBytes } from '@/shared/format'
 
-interface Space {
-  readonly usedBytes: number | null
-  readonly quotaBytes: number | null
+interface Space extends StorageRoom {
   readonly isPersisted: boolean
 }
 
 async function readSpace(): Promise<Space> {
-  const storage = globalThis.navigator?.storage
-  const estimate = (await storage?.estimate?.()) ?? {}
-  return {
-    usedBytes: estimate.usage ?? null,
-    quotaBytes: estimate.quota ?? null,
-    isPersisted: (await storage?.persisted?.()) ?? false,
-  }
+  const isPersisted = (await globalThis.navigator?.storage?.persisted?.()) ?? false
+  return { ...(await readStorageRoom()), isPersisted }
 }
 
 /** Space used, and whether the browser may clear it by itself. */
@@ -35,7 +30,7 @@ export function SpacePanel() {
     read()
   }
   if (!space) return null
-  const { usedBytes, quotaBytes, isPersisted } = space
+  const { usedBytes, quotaBytes, isPersisted, level } = space
   return (
     <Panel title={t('bag.space')}>
       {usedBytes !== null && quotaBytes ? (
@@ -46,6 +41,12 @@ export function SpacePanel() {
       ) : (
         <AppText soft>{t('bag.spaceUnknown')}</AppText>
       )}
+      {level === 'tight' ? (
+        <Notice tone="attention" whatHappened={t('bag.spaceTight')} whatToDo={t('bag.spaceTightToDo')} />
+      ) : null}
+      {level === 'full' ? (
+        <Notice tone="error" whatHappened={t('bag.spaceFull')} whatToDo={t('bag.spaceFullToDo')} />
+      ) : null}
       <AppText>{t(isPersisted ? 'bag.persisted' : isAsked ? 'bag.stillNotPersisted' : 'bag.notPersisted')}</AppText>
       {isPersisted || isAsked ? null : (
         <Button kind="secondary" label={t('bag.askToKeep')} onPress={() => void ask()} />

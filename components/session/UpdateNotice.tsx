@@ -1,9 +1,10 @@
-import { useEffect, useState } from 'react'
+import { useEffect, useState, useSyncExternalStore } from 'react'
 import { Button } from '@/components/ui/Button'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Notice } from '@/components/ui/Notice'
+import { handInBusy } from '@/sync/react/handInBusy'
 
-/** Says that a newer app waits; it changes over when the person says so, never under a form. */
+/** Says that a newer app waits; it changes over when the person says so, never under a form or a bag on its way. */
 export function UpdateNotice() {
   const { t } = useMessages()
   const [changeOver, setChangeOver] = useState<(() => void) | null>(null)
@@ -15,7 +16,8 @@ export function UpdateNotice() {
     globalThis.addEventListener?.('tallystone-update', hear)
     return () => globalThis.removeEventListener?.('tallystone-update', hear)
   }, [])
-  if (!changeOver) return null
+  const isBusy = useSyncExternalStore(handInBusy.subscribe, handInBusy.get, handInBusy.get)
+  if (!changeOver || isBusy) return null
   return (
     <Notice
       tone="selection"

@@ -4,7 +4,11 @@ import type { Problem } from '@/shared/schemas/problem'
 export class ApiError extends Error {
   override readonly name = 'ApiError'
 
-  constructor(readonly problem: Problem) {
+  constructor(
+    readonly problem: Problem,
+    /** How long the server asks to wait [s]; null where it does not say. */
+    readonly retryAfterS: number | null = null,
+  ) {
     super(`${problem.status} ${problem.code}`)
   }
 

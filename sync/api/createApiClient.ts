@@ -102,8 +102,13 @@ export function toRequest<E extends Endpoint>(
 async function toError(response: Response): Promise<Error> {
   const parsed = problem.safeParse(await readJson(response).catch(() => null))
   return parsed.success
-    ? new ApiError(parsed.data)
+    ? new ApiError(parsed.data, readRetryAfter(response.headers.get('Retry-After')))
     : new UnreachableError(`an answer that is not ours: ${response.status}`)
+}
+
+/** Seconds; the form with a date is not used by this server. */
+function readRetryAfter(header: string | null): number | null {
+  return header !== null && /^\d{1,6}$/.test(header) ? Number(header) : null
 }
 
 async function readJson(response: Response): Promise<unknown> {

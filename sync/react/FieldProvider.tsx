@@ -14,6 +14,7 @@ import type { FieldStore } from '@/db/fieldStore.types'
 import { openFieldDatabase } from '@/db/openFieldDatabase'
 import { createHandIn, type RunningHandIn } from '@/sync/createHandIn'
 import type { HandIn, HandInState } from '@/sync/handIn.types'
+import { handInBusy } from './handInBusy'
 import { useAccount, useSessionStore } from './SessionProvider'
 
 interface Field {
@@ -65,7 +66,10 @@ function useOpening(deviceName: string) {
         leave()
         setOpening({ kind: 'elsewhere' })
       }
-      const database = await openFieldDatabase({ organisationId, personId }, { takeOver: attempt > 0, onTaken })
+      const database = await openFieldDatabase(
+        { organisationId, personId },
+        { takeOver: attempt > 0, onTaken, deviceId: session.deviceId },
+      )
       const running = createHandIn({
         store: database.sync,
         api: session.api,
@@ -73,6 +77,8 @@ function useOpening(deviceName: string) {
         renewDeviceId: () => session.renewDeviceId(),
         adoptToken: (token) => session.adoptToken(token),
         deviceName,
+        publicKey: database.publicKey,
+        sendSurrender: session.sendSurrender,
         now: () => new Date(),
         random: Math.random,
         later: (work, delayMs) => {
@@ -81,8 +87,10 @@ function useOpening(deviceName: string) {
         },
       })
       const stopWaking = wake(running)
+      const stopTelling = tellBusy(running)
       leave = () => {
         stopWaking()
+        stopTelling()
         running.stop()
       }
       if (isLeft) {
@@ -141,15 +149,26 @@ export function useHandInState(): HandInState {
   return useSyncExternalStore(handIn.subscribe, handIn.getState, handIn.getState)
 }
 
+/** The app must not change over to a newer one while the bag is on its way. */
+function tellBusy(running: RunningHandIn): () => void {
+  const tell = () => handInBusy.set(['sending', 'fetching', 'sending-photos'].includes(running.getState().phase))
+  const stop = running.subscribe(tell)
+  return () => {
+    stop()
+    handInBusy.set(false)
+  }
+}
+
 /**
  * What a read of the device's database says, read anew after every change of it.
  *
  * @param read keep it with `useCallback`
  * @returns undefined until the first answer
+ * @throws while rendering, what the read threw: a database that cannot be read must not look like an empty one
  */
 export function useStored<Result>(read: (store: FieldStore) => Promise<Result>): Result | undefined {
   const { store } = useField()
-  const [found, setFound] = useState<{ result: Result } | undefined>(undefined)
+  const [found, setFound] = useState<{ result: Result } | { fault: unknown } | undefined>(undefined)
   const latest = useRef(0)
   useEffect(() => {
     let isLeft = false
@@ -159,7 +178,9 @@ export function useStored<Result>(read: (store: FieldStore) => Promise<Result>):
         (result) => {
           if (!isLeft && turn === latest.current) setFound({ result })
         },
-        () => undefined,
+        (fault: unknown) => {
+          if (!isLeft && turn === latest.current) setFound({ fault })
+        },
       )
     }
     readNow()
@@ -169,5 +190,6 @@ export function useStored<Result>(read: (store: FieldStore) => Promise<Result>):
       unsubscribe()
     }
   }, [read, store])
+  if (found && 'fault' in found) throw found.fault
   return found?.result
 }

@@ -1,5 +1,7 @@
 import { refreshSession, signIn, signOut, type Session } from '@/shared/api/auth'
 import { account as accountSchema, type Account } from '@/shared/schemas/person'
+import { surrenderBag } from '@/shared/api/sync'
+import type { SendSurrender } from '@/sync/surrenderBag'
 import { ApiError, UnreachableError } from '@/sync/api/ApiError'
 import { createApiClient, type ApiClient } from '@/sync/api/createApiClient'
 
@@ -21,6 +23,8 @@ export interface SessionState {
 export interface SessionStore {
   readonly api: ApiClient
   readonly deviceId: () => string
+  /** Hands a sealed bag over without a session: the one of a device that is shut out opens nothing. */
+  readonly sendSurrender: SendSurrender
   /** Another id after the server knew this one for another phone; kept for all later requests. */
   renewDeviceId(): string
   getState(): SessionState
@@ -105,9 +109,15 @@ export function createSessionStore({
   }
   const api = createApiClient({ accessToken: () => token, renew, ...(origin === undefined ? {} : { origin }) })
 
+  const plainApi = createApiClient({
+    accessToken: () => null,
+    renew: async () => null,
+    ...(origin === undefined ? {} : { origin }),
+  })
   return {
     api,
     deviceId,
+    sendSurrender: (body, signal) => plainApi.call(surrenderBag, { body }, signal),
     renewDeviceId() {
       const made = newId()
       store.set(KEYS.device, made)

@@ -47,8 +47,12 @@ export interface AppServer {
  * Starts the built server.
  *
  * @param content `demo`: Saltmarsh Hythe with its accounts; `empty`: tables only
+ * @param options.webRoot another folder of the built app than the one that was built
  */
-export async function startAppServer(content: 'demo' | 'empty'): Promise<AppServer> {
+export async function startAppServer(
+  content: 'demo' | 'empty',
+  { webRoot }: { readonly webRoot?: string } = {},
+): Promise<AppServer> {
   const state = readState()
   const database = await copyTemplate(content === 'demo' ? state.demo : state.migrated)
   const photoRoot = mkdtempSync(path.join(os.tmpdir(), 'tallystone-photos-'))
@@ -56,7 +60,11 @@ export async function startAppServer(content: 'demo' | 'empty'): Promise<AppServ
   const mail = await startMailSink(() => new Date())
   const port = (await tryPort(0)) ?? 0
   const url = `http://127.0.0.1:${port}`
-  const settings = { ...serverSettings(database, { photoRoot, port }), MAIL_URL: mail.url }
+  const settings = {
+    ...serverSettings(database, { photoRoot, port }),
+    MAIL_URL: mail.url,
+    ...(webRoot ? { WEB_ROOT: webRoot } : {}),
+  }
   let running: StartedProcess | undefined
   const stop = async () => {
     await running?.stop()

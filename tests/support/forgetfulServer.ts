@@ -1,5 +1,5 @@
 import { readDeviceLooks } from '@/shared/api/nextLook'
-import { pullChanges, pushMutations, readDeviceEdition, renewDevice } from '@/shared/api/sync'
+import { enrolDeviceKey, pullChanges, pushMutations, readDeviceEdition, renewDevice } from '@/shared/api/sync'
 import type { Endpoint, EndpointReply } from '@/shared/api/defineEndpoint'
 import { mutation, type Change, type MutationOutcome } from '@/shared/schemas/sync'
 import { syncDigest } from '@/shared/sync/syncDigest'
@@ -13,7 +13,16 @@ export const BUILDING_ID = '01980000-0000-7000-8000-0000000000a1'
 
 /** What goes wrong next; each is used up by one call. */
 export type Mishap =
-  'no-answer' | 'answer-lost' | 'server-fault' | 'too-large' | 'resync' | 'sign-in' | 'too-old' | 'fork'
+  | 'no-answer'
+  | 'answer-lost'
+  | 'server-fault'
+  | 'too-large'
+  | 'resync'
+  | 'sign-in'
+  | 'too-old'
+  | 'fork'
+  | 'shut-out'
+  | 'busy'
 
 /** A server in memory that keeps what it judged and can be told to lose answers. */
 export class ForgetfulServer {
@@ -44,13 +53,8 @@ export class ForgetfulServer {
   readonly api: ApiClient = {
     call: async <E extends Endpoint>(endpoint: E, input: CallInput<E> = {}): Promise<EndpointReply<E>> => {
       const mishap = this.mishaps.shift()
-      if (mishap === 'no-answer') throw new UnreachableError('no answer')
-      if (mishap === 'server-fault') throw refusal(500, 'server-fault')
-      if (mishap === 'sign-in') throw refusal(401, 'sign-in-again')
-      if (mishap === 'too-large') throw refusal(413, 'too-large')
-      if (mishap === 'too-old') throw refusal(426, 'upgrade-required')
-      if (mishap === 'fork') throw refusal(409, 'sequence-fork')
-      if (mishap === 'resync') throw refusal(410, 'resync-required')
+      const fault = mishap === undefined ? undefined : FAULTS[mishap]
+      if (fault) throw fault()
       const reply = this.answer(endpoint, input)
       if (mishap === 'answer-lost') throw new UnreachableError('the answer was lost')
       return endpoint.response.parse(reply) as EndpointReply<E>
@@ -65,9 +69,17 @@ export class ForgetfulServer {
     if (endpoint.path === pullChanges.path) return this.pull(pullChanges.query.parse(input.query))
     if (endpoint.path === renewDevice.path) this.enrolled.push(renewDevice.body.parse(input.body).deviceId)
     if (endpoint.path === renewDevice.path) return { accessToken: 'renewed', expiresInS: 600 }
+    if (endpoint.path === enrolDeviceKey.path) return this.takeKey()
     if (endpoint.path === readDeviceEdition.path) throw refusal(404, 'not-found')
     if (endpoint.path === readDeviceLooks.path) return { rounds: [] }
     throw new UnreachableError(`${endpoint.path} is not served here`)
+  }
+
+  /** How often a key came. */
+  keysTaken = 0
+  private takeKey() {
+    this.keysTaken += 1
+    return { isEnrolled: true }
   }
 
   private push({ deviceId, batch }: { deviceId: string; batch: unknown[] }) {
@@ -122,4 +134,17 @@ export class ForgetfulServer {
 function refusal(status: number, code: string, expected?: number): ApiError {
   const said = { type: 'about:blank', title: code, status, code, detail: code, faults: [] }
   return new ApiError(expected === undefined ? said : { ...said, expected })
+}
+
+/** What is thrown instead of an answer; a lost answer is lost after the server did its work. */
+const FAULTS: Readonly<Partial<Record<Mishap, () => Error>>> = {
+  'no-answer': () => new UnreachableError('no answer'),
+  'server-fault': () => refusal(500, 'server-fault'),
+  'sign-in': () => refusal(401, 'sign-in-again'),
+  'too-large': () => refusal(413, 'too-large'),
+  'too-old': () => refusal(426, 'upgrade-required'),
+  fork: () => refusal(409, 'sequence-fork'),
+  'shut-out': () => refusal(403, 'device-revoked'),
+  busy: () => new ApiError(refusal(503, 'busy').problem, 40),
+  resync: () => refusal(410, 'resync-required'),
 }

@@ -13,6 +13,7 @@ import { pullChanges } from '@/sync/pullChanges'
 import { pushOutbox } from '@/sync/pushOutbox'
 import type { TestPerson } from '@/tests/support/buildPerson'
 import type { TestApp } from '@/tests/support/createTestApp'
+import { memoryTwin } from '@/tests/support/memoryTwin'
 import { signInAs } from '@/tests/support/signInAs'
 import type { Fault } from '@/tests/sync/model/modelPhone'
 
@@ -60,6 +61,9 @@ export class RealPhone {
     const store = createSyncStore({
       driver: this.#driver,
       photoFiles: nowhere,
+      twin: memoryTwin(),
+      owner: { ...this.person, deviceId: () => this.deviceId, sign: async () => null },
+      readRoom: async () => ({ level: 'roomy' }),
       now: () => new Date('2026-10-13T14:08:00Z'),
       changed: () => {},
       subscribe: () => () => {},
