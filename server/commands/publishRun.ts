@@ -1,7 +1,8 @@
 import { randomUUID } from 'node:crypto'
 import type { Context } from '@/server/context'
 import type { Actor, Scope } from '@/server/database'
-import { conflictWith, notFound, unusable } from '@/server/errors'
+import { conflictWith, notFound } from '@/server/errors'
+import { requireContractors } from '@/server/policies/requireContractors'
 import { readPublications } from '@/server/queries/readPublications'
 import { readRunSummary } from '@/server/queries/readRuns'
 import type { Publication } from '@/shared/api/publications'
@@ -14,7 +15,11 @@ export interface PublicationOrder {
 }
 
 /** Publishes a finished run, for its district as a whole, to chosen contractors. */
-export function publishRun({ database }: Pick<Context, 'database'>, actor: Actor, order: PublicationOrder): Promise<Publication> {
+export function publishRun(
+  { database }: Pick<Context, 'database'>,
+  actor: Actor,
+  order: PublicationOrder,
+): Promise<Publication> {
   return database.withScope(actor, async (scope) => {
     const run = await readRunSummary(scope, order.runId)
     if (run.state !== 'done')
@@ -22,7 +27,7 @@ export function publishRun({ database }: Pick<Context, 'database'>, actor: Actor
         'run-not-done',
         'Only a finished run can be published. Wait for it to finish; nothing was published.',
       )
-    await refuseOthersThanContractors(scope, order.recipientIds)
+    await requireContractors(scope, order.recipientIds)
     const publicationId = randomUUID()
     await scope.execute(
       `INSERT INTO publication (organisation_id, publication_id, run_id, title, published_by)
@@ -70,24 +75,4 @@ async function onePublication(scope: Scope, publicationId: string): Promise<Publ
   const [publication] = await readPublications(scope, { publicationId })
   if (!publication) throw notFound('publication')
   return publication
-}
-
-async function refuseOthersThanContractors(scope: Scope, recipientIds: readonly string[]): Promise<void> {
-  const contractors = await scope.select<{ person_id: string }>(
-    `SELECT person_id FROM person WHERE organisation_id = $organisationId AND 'contractor' = ANY(roles) AND status <> 'disabled'`,
-    { organisationId: scope.organisationId },
-  )
-  const known = new Set(contractors.map(({ person_id }) => person_id))
-  const faults = recipientIds.flatMap((recipientId, index) =>
-    known.has(recipientId)
-      ? []
-      : [
-          {
-            pointer: `/body/recipientIds/${index}`,
-            code: 'not-a-contractor',
-            detail: 'This is no contractor of the organisation.',
-          },
-        ],
-  )
-  if (faults.length > 0) throw unusable('A run is published to contractors only; nothing was published.', faults)
 }

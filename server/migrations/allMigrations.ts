@@ -9,6 +9,7 @@ import { m0008SheetRecorder } from './m0008SheetRecorder'
 import { m0011LookFigure } from './m0011LookFigure'
 import { m0014BagSafety } from './m0014BagSafety'
 import { m0018YardPlan } from './m0018YardPlan'
+import { m0019Listings } from './m0019Listings'
 import type { Migration } from './tenantTable'
 
 /** Every step of the schema in order; append only. */
@@ -24,4 +25,5 @@ export const allMigrations: readonly Migration[] = [
   m0011LookFigure,
   m0014BagSafety,
   m0018YardPlan,
+  m0019Listings,
 ]

@@ -4,6 +4,7 @@ import { authRoutes } from './auth/authRoutes'
 import { factorBookRoutes } from './factorBook/factorBookRoutes'
 import { healthRoutes } from './health/healthRoutes'
 import { nextLookRoutes } from './nextLook/nextLookRoutes'
+import { listingRoutes } from './listings/listingRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
@@ -33,4 +34,5 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   receiptRoutes,
   publicationRoutes,
   yardRoutes,
+  listingRoutes,
 ]

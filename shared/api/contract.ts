@@ -3,6 +3,7 @@ import type { Endpoint } from './defineEndpoint'
 import * as factorBook from './factorBook'
 import * as health from './health'
 import * as nextLook from './nextLook'
+import * as listings from './listings'
 import * as outlines from './outlines'
 import * as people from './people'
 import * as publications from './publications'
@@ -29,6 +30,7 @@ export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
       runs,
       publications,
       yard,
+      listings,
       nextLook,
       receipts,
       health,
