@@ -22,6 +22,7 @@ function deskEntries(t: Translate, waitingCount: number): NavEntry[] {
   return [
     { href: '/district', label: t('nav.district'), icon: 'district' },
     { href: '/rounds', label: t('nav.rounds'), icon: 'rounds' },
+    { href: '/look-next', label: t('nav.lookNext'), icon: 'locate' },
     { href: '/review', label: t('nav.review'), icon: 'review', badge: waitingCount },
     { href: '/stock', label: t('nav.stock'), icon: 'stock' },
     { href: '/years-ahead', label: t('nav.yearsAhead'), icon: 'years-ahead' },

@@ -1,0 +1,5 @@
+import { LookNextScreen } from '@/components/nextLook/LookNextScreen'
+
+export default function LookNextRoute() {
+  return <LookNextScreen />
+}
