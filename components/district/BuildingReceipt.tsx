@@ -1,5 +1,7 @@
 import { StyleSheet, View } from 'react-native'
 import { Course } from '@/components/charts/Course'
+import { ReceiptFigure } from '@/components/receipts/ReceiptFigure'
+import { receiptHref } from '@/components/receipts/receiptHref'
 import { MaterialName } from '@/components/runs/MaterialName'
 import { AppText } from '@/components/ui/AppText'
 import { DataTable } from '@/components/ui/DataTable'
@@ -14,12 +16,13 @@ import type { Messages } from '@/shared/messages/messages.types'
 import type { RunBuilding } from '@/shared/schemas/run'
 
 interface BuildingReceiptProps {
+  readonly runId: string
   readonly building: RunBuilding
   readonly onClose: () => void
 }
 
 /** How a building's figures come about: what it is, and floor area times factor for each material. */
-export function BuildingReceipt({ building, onClose }: BuildingReceiptProps) {
+export function BuildingReceipt({ runId, building, onClose }: BuildingReceiptProps) {
   const messages = useMessages()
   const { t, locale } = messages
   const { colours } = useTheme()
@@ -34,10 +37,11 @@ export function BuildingReceipt({ building, onClose }: BuildingReceiptProps) {
       tone="selection"
       action={<IconButton icon="close" label={t('district.closeReceipt')} onPress={onClose} />}
     >
-      <AppText
-        kind="figure"
-        size="figure"
-      >{`${formatMass(building.massKg, locale)} ${t('district.standing')}`}</AppText>
+      <ReceiptFigure
+        text={`${formatMass(building.massKg, locale)} ${t('district.standing')}`}
+        what={`${building.label} ${t('district.standing')}`}
+        href={receiptHref({ runId, kind: 'stock', buildingId: building.buildingId })}
+      />
       <Course parts={lines.filter(({ massKg }) => massKg > 0)} rows={2} of={building.label} />
       <View role="list" aria-label={t('district.receipt')}>
         {facts(building, messages).map(({ label, value }) => (

@@ -61,7 +61,12 @@ export function RunDistrict({ run, picker }: RunDistrictProps) {
       fill={fills}
       aside={
         <>
-          <Receipt building={selected} isPressed={selectedOutlineId !== null} onClose={() => setSelected(null)} />
+          <Receipt
+            runId={run.runId}
+            building={selected}
+            isPressed={selectedOutlineId !== null}
+            onClose={() => setSelected(null)}
+          />
           {result ? <Totals run={run} result={result} buildings={found} /> : null}
           {result ? <RunBasisPanel run={run} result={result} /> : null}
           <RunTitleBlock run={run} />
@@ -111,14 +116,15 @@ function TableRoom({ fills, children }: { readonly fills: boolean; readonly chil
 }
 
 interface ReceiptProps {
+  readonly runId: string
   readonly building: RunBuilding | undefined
   readonly isPressed: boolean
   readonly onClose: () => void
 }
 
-function Receipt({ building, isPressed, onClose }: ReceiptProps) {
+function Receipt({ runId, building, isPressed, onClose }: ReceiptProps) {
   const { t } = useMessages()
-  if (building) return <BuildingReceipt building={building} onClose={onClose} />
+  if (building) return <BuildingReceipt runId={runId} building={building} onClose={onClose} />
   if (isPressed) return <EmptyState title={t('district.notInRun')} text={t('district.notInRunText')} />
   return <AppText soft>{t('district.select')}</AppText>
 }

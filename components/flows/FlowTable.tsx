@@ -1,3 +1,5 @@
+import { receiptHref } from '@/components/receipts/receiptHref'
+import { ReceiptLink } from '@/components/receipts/ReceiptLink'
 import { csvText } from '@/components/ui/csvText'
 import { DataTable, type Column } from '@/components/ui/DataTable'
 import { useMessages } from '@/components/ui/MessagesProvider'
@@ -11,20 +13,32 @@ interface FlowTableProps {
   readonly rows: readonly FlowRow[]
   readonly materials: readonly Material[]
   readonly fileName: string
+  /** Where each figure comes from; none where two flows are added. */
+  readonly receipt?: { readonly runId: string; readonly kind: 'demolition' | 'refurbishment' } | undefined
 }
 
 /** What comes out, year by year and material by material. */
-export function FlowTable({ rows, materials, fileName }: FlowTableProps) {
+export function FlowTable({ rows, materials, fileName, receipt }: FlowTableProps) {
   const { t, locale } = useMessages()
   const unit = massUnitFor(rows.map(({ totalKg }) => totalKg))
   const mass = (massKg: number | null | undefined): string =>
     formatMassFigure(massKg === null || massKg === undefined ? NaN : massKg, locale, unit)
+  const figure = (massKg: number | undefined, year: number, material: Material | 'all', name: string) =>
+    receipt && massKg !== undefined ? (
+      <ReceiptLink
+        text={mass(massKg)}
+        what={`${name}, ${year}`}
+        href={receiptHref({ ...receipt, material, fromYear: year, toYear: year })}
+      />
+    ) : (
+      mass(massKg)
+    )
   const columns: Column<FlowRow>[] = [
     { key: 'year', head: t('common.year'), cell: ({ year }) => String(year), sortBy: ({ year }) => year, minWidth: 64 },
     {
       key: 'total',
       head: t('yearsAhead.total'),
-      cell: ({ totalKg }) => mass(totalKg),
+      cell: ({ year, totalKg }) => figure(totalKg, year, 'all', t('yearsAhead.total')),
       sortBy: ({ totalKg }) => totalKg,
       align: 'right',
     },
@@ -33,7 +47,7 @@ export function FlowTable({ rows, materials, fileName }: FlowTableProps) {
     ...materials.map((material): Column<FlowRow> => ({
       key: material,
       head: t(`vocabulary.material.${material}`),
-      cell: ({ massKg }) => mass(massKg[material]),
+      cell: ({ year, massKg }) => figure(massKg[material], year, material, t(`vocabulary.material.${material}`)),
       sortBy: ({ massKg }) => massKg[material] ?? null,
       align: 'right',
       minWidth: 96,

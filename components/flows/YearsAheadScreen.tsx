@@ -4,6 +4,8 @@ import { BandChart } from '@/components/charts/BandChart'
 import { Legend } from '@/components/charts/Legend'
 import { StackedFlows } from '@/components/charts/StackedFlows'
 import { Swatch } from '@/components/charts/Swatch'
+import { ReceiptFigure } from '@/components/receipts/ReceiptFigure'
+import { receiptHref } from '@/components/receipts/receiptHref'
 import { RunReport } from '@/components/runs/RunReport'
 import { AppText } from '@/components/ui/AppText'
 import { Choice } from '@/components/ui/Choice'
@@ -72,7 +74,7 @@ function YearsAheadReport({ run, result }: YearsAheadReportProps) {
         </View>
         {hasRefurbishment ? null : <AppText soft>{t('yearsAhead.noRefurbishment')}</AppText>}
       </Panel>
-      <Cumulative yearsAhead={yearsAhead} yearCount={rows.length} />
+      <Cumulative runId={run.runId} yearsAhead={yearsAhead} yearCount={rows.length} />
       <Panel title={t('yearsAhead.perYear')} note={kind === 'both' ? undefined : t('yearsAhead.perYearNote')}>
         {kind === 'both' ? <AppText soft>{t('yearsAhead.bothNote')}</AppText> : null}
         <StackedFlows
@@ -92,19 +94,25 @@ function YearsAheadReport({ run, result }: YearsAheadReportProps) {
           }))}
         />
       </Panel>
-      <FlowTable rows={rows} materials={materials} fileName={`run-${run.number}-${kind}-by-year.csv`} />
+      <FlowTable
+        rows={rows}
+        materials={materials}
+        fileName={`run-${run.number}-${kind}-by-year.csv`}
+        receipt={kind === 'both' ? undefined : { runId: run.runId, kind }}
+      />
       <ExpectedTable rows={rows} fileName={`run-${run.number}-expected-by-year.csv`} />
     </>
   )
 }
 
 interface CumulativeProps {
+  readonly runId: string
   readonly yearsAhead: RunResult['yearsAhead']
   readonly yearCount: number
 }
 
 /** Demolition added up over the years, the band included: bands of single years cannot be added. */
-function Cumulative({ yearsAhead, yearCount }: CumulativeProps) {
+function Cumulative({ runId, yearsAhead, yearCount }: CumulativeProps) {
   const { t, locale } = useMessages()
   const { cumulative } = yearsAhead
   const years = yearsAhead.years.slice(0, yearCount)
@@ -119,9 +127,11 @@ function Cumulative({ yearsAhead, yearCount }: CumulativeProps) {
   if (!first || !last) return null
   return (
     <Panel title={t('yearsAhead.cumulative')}>
-      <AppText kind="figure" size="figure">
-        {t('yearsAhead.summaryLikely', { mass: formatMass(last.likelyKg, locale) })}
-      </AppText>
+      <ReceiptFigure
+        text={t('yearsAhead.summaryLikely', { mass: formatMass(last.likelyKg, locale) })}
+        what={`${t('yearsAhead.cumulative')}, ${formatYearRange(first.year, last.year)}`}
+        href={receiptHref({ runId, kind: 'demolition', fromYear: first.year, toYear: last.year })}
+      />
       <AppText soft>
         {t('yearsAhead.summary', {
           range: formatMassRange(last.lowKg, last.highKg, locale),

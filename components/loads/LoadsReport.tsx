@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { StyleSheet, View } from 'react-native'
+import { loadReceiptHref } from '@/components/receipts/loadReceiptHref'
 import { AppText } from '@/components/ui/AppText'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
@@ -71,7 +72,15 @@ export function LoadsReport({ loads, plan, isKeeping, onKeep }: LoadsReportProps
       <CapacityPanel lines={lines} capacityTPerYear={plan.capacityTPerYear} fileName={`${name}-plant.csv`} />
       <RecoveryPanel totals={totals} plan={plan} isKeeping={isKeeping} onKeep={onKeep} />
       <Panel title={t('loads.byYear')} note={span}>
-        <WasteTable label={t('loads.byYear')} rows={lines} hasYears fileName={`${name}-by-year.csv`} />
+        <WasteTable
+          label={t('loads.byYear')}
+          rows={lines}
+          hasYears
+          fileName={`${name}-by-year.csv`}
+          receiptHrefOf={({ code, year }) =>
+            loadReceiptHref(loads.publication.publicationId, { code, year, ...loads.fleet })
+          }
+        />
       </Panel>
       <LoadSources loads={loads} />
     </>

@@ -1,4 +1,5 @@
 import { StyleSheet, View } from 'react-native'
+import { ReceiptLink } from '@/components/receipts/ReceiptLink'
 import { AppText } from '@/components/ui/AppText'
 import { Badge } from '@/components/ui/Badge'
 import { csvText } from '@/components/ui/csvText'
@@ -19,10 +20,12 @@ interface WasteTableProps {
   readonly rows: readonly (WasteLine | CodeTotal)[]
   readonly hasYears: boolean
   readonly fileName: string
+  /** Address of the receipt of a line. */
+  readonly receiptHrefOf?: (line: { readonly code: string; readonly year: number }) => string
 }
 
 /** Tonnes, loose cubic metres and loads by waste code, each as low, likely and high. */
-export function WasteTable({ label, rows, hasYears, fileName }: WasteTableProps) {
+export function WasteTable({ label, rows, hasYears, fileName, receiptHrefOf }: WasteTableProps) {
   const { t, locale } = useMessages()
   const volume = (volumeM3: number): string => formatVolume(volumeM3, locale).replace(/\u00a0m³$/, '')
   const figures = (
@@ -42,11 +45,19 @@ export function WasteTable({ label, rows, hasYears, fileName }: WasteTableProps)
     {
       key: head,
       head: t(`loads.${head}`),
-      cell: (row) => (
-        <AppText kind="number" weight="semibold" align="right">
-          {write(row[field].likely)}
-        </AppText>
-      ),
+      cell: (row) =>
+        receiptHrefOf && row.year !== undefined && field === 'massKg' ? (
+          <ReceiptLink
+            bold
+            text={write(row[field].likely)}
+            what={`${row.code} ${row.text}, ${row.year}`}
+            href={receiptHrefOf({ code: row.code, year: row.year })}
+          />
+        ) : (
+          <AppText kind="number" weight="semibold" align="right">
+            {write(row[field].likely)}
+          </AppText>
+        ),
       sortBy: (row) => row[field].likely,
       align: 'right',
       minWidth: 76,

@@ -1,7 +1,9 @@
 import type { ReceiptFigure } from '@/shared/schemas/receipt'
 
 /** What of a figure is not "all"; the rest may be left out. */
-export type WantedFigure = Partial<ReceiptFigure> & { readonly runId: string }
+export type WantedFigure = Readonly<Partial<Record<keyof ReceiptFigure, string | number | null>>> & {
+  readonly runId: string
+}
 
 const NAMES = {
   runId: 'run',

@@ -1,3 +1,5 @@
+import { receiptHref } from '@/components/receipts/receiptHref'
+import { ReceiptLink } from '@/components/receipts/ReceiptLink'
 import { csvText } from '@/components/ui/csvText'
 import { DataTable } from '@/components/ui/DataTable'
 import { useMessages } from '@/components/ui/MessagesProvider'
@@ -60,7 +62,13 @@ export function GroupTable({ run, title, dimension, cells, nameOf }: GroupTableP
           {
             key: 'mass',
             head: t('stock.mass', { unit }),
-            cell: ({ massKg }) => formatMassFigure(massKg, locale, unit),
+            cell: ({ key, massKg }) => (
+              <ReceiptLink
+                text={formatMassFigure(massKg, locale, unit)}
+                what={`${nameOf(key)} ${t('stock.standing')}`}
+                href={receiptHref({ runId: run.runId, kind: 'stock', [dimension]: key })}
+              />
+            ),
             sortBy: ({ massKg }) => massKg,
             align: 'right',
           },

@@ -1,3 +1,5 @@
+import { receiptHref } from '@/components/receipts/receiptHref'
+import { ReceiptLink } from '@/components/receipts/ReceiptLink'
 import { MaterialName } from '@/components/runs/MaterialName'
 import { AppText } from '@/components/ui/AppText'
 import { Badge } from '@/components/ui/Badge'
@@ -44,7 +46,13 @@ export function MaterialTable({ run, result }: MaterialTableProps) {
           {
             key: 'mass',
             head: t('stock.mass', { unit }),
-            cell: ({ band }) => mass(band.meanKg),
+            cell: ({ material, band }) => (
+              <ReceiptLink
+                text={mass(band.meanKg)}
+                what={`${t(`vocabulary.material.${material}`)} ${t('stock.standing')}`}
+                href={receiptHref({ runId: run.runId, kind: 'stock', material })}
+              />
+            ),
             sortBy: ({ band }) => band.meanKg,
             align: 'right',
           },

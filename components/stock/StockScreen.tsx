@@ -1,5 +1,7 @@
 import { AgePyramid } from '@/components/charts/AgePyramid'
 import { Course } from '@/components/charts/Course'
+import { ReceiptFigure } from '@/components/receipts/ReceiptFigure'
+import { receiptHref } from '@/components/receipts/receiptHref'
 import { RunReport } from '@/components/runs/RunReport'
 import { AppText } from '@/components/ui/AppText'
 import { EmptyState } from '@/components/ui/EmptyState'
@@ -79,9 +81,11 @@ function StockTotal({ run, result }: StockReportProps) {
     .sort((one, other) => other.massKg - one.massKg)
   return (
     <Panel title={run.districtName} note={t('common.buildings', { count: basis.computedCount })}>
-      <AppText kind="figure" size="figure">
-        {`${formatMass(stock.total.meanKg, locale)} ${t('stock.standing')}`}
-      </AppText>
+      <ReceiptFigure
+        text={`${formatMass(stock.total.meanKg, locale)} ${t('stock.standing')}`}
+        what={`${run.districtName} ${t('stock.standing')}`}
+        href={receiptHref({ runId: run.runId, kind: 'stock' })}
+      />
       <AppText soft>
         {`${t('stock.range', { range: formatMassRange(stock.total.p10Kg, stock.total.p90Kg, locale) })} · ${t(
           'stock.perFloorArea',
