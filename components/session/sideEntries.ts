@@ -8,7 +8,14 @@ type Translate = Messages['t']
 export function sideEntries(roles: readonly Role[], t: Translate, waitingCount = 0): NavEntry[] {
   const sides: readonly (readonly [Role, string, readonly NavEntry[]])[] = [
     ['planner', t('nav.desk'), deskEntries(t, waitingCount)],
-    ['contractor', t('nav.yard'), [{ href: '/loads-ahead', label: t('nav.loadsAhead'), icon: 'loads' }]],
+    [
+      'contractor',
+      t('nav.yard'),
+      [
+        { href: '/loads-ahead', label: t('nav.loadsAhead'), icon: 'loads' },
+        { href: '/listed-buildings', label: t('nav.listed'), icon: 'listed' },
+      ],
+    ],
     ['steward', t('nav.steward'), [{ href: '/people', label: t('nav.people'), icon: 'people' }]],
     ['surveyor', t('nav.field'), [{ href: '/today', label: t('nav.today'), icon: 'home' }]],
   ]
@@ -27,6 +34,7 @@ function deskEntries(t: Translate, waitingCount: number): NavEntry[] {
     { href: '/stock', label: t('nav.stock'), icon: 'stock' },
     { href: '/years-ahead', label: t('nav.yearsAhead'), icon: 'years-ahead' },
     { href: '/publish', label: t('nav.publish'), icon: 'loads' },
+    { href: '/listed', label: t('nav.listed'), icon: 'listed' },
     { href: '/factor-book', label: t('nav.factorBook'), icon: 'factor-book' },
   ]
 }

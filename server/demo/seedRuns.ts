@@ -4,6 +4,7 @@ import { insertRun } from '@/server/commands/startRun'
 import { openDatabase } from '@/server/database'
 import { computeRun } from '@/server/jobs/computeRun'
 import { scenario } from '@/shared/schemas/run'
+import { seedListings } from './seedListings'
 import { demoId } from './seeding.types'
 
 /** Runs of the demo go the way of every run, so their figures are real figures of invented sheets. */
@@ -12,7 +13,7 @@ const RUNS = [
   { round: 'kiln-2026', name: 'Calibrated on demolitions seen since 2020', hazardMultiplier: 0.3, isPublished: true },
 ] as const
 
-/** Computes two runs of the demo and publishes one to its contractors. */
+/** Computes two runs of the demo, publishes one to its contractors, and lists two of its buildings. */
 export async function seedRuns(ownerUrl: string): Promise<void> {
   const database = openDatabase(ownerUrl, { poolSize: 2 })
   const log = pino({ level: 'silent' })
@@ -30,6 +31,7 @@ export async function seedRuns(ownerUrl: string): Promise<void> {
       if (isPublished) {
         const recipientIds = [demoId('person', 'contractor'), demoId('person', 'contractor-2')]
         await publishRun({ database }, planner, { runId, title: 'Kiln Quarter, years ahead', recipientIds })
+        await seedListings(database, planner, runId)
       }
     }
   } finally {

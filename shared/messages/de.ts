@@ -2,6 +2,7 @@ import auth from './de/auth.json'
 import bag from './de/bag.json'
 import cautions from './de/cautions.json'
 import common from './de/common.json'
+import listed from './de/listed.json'
 import loads from './de/loads.json'
 import mail from './de/mail.json'
 import me from './de/me.json'
@@ -21,6 +22,7 @@ export const de = {
   bag,
   cautions,
   common,
+  listed,
   loads,
   mail,
   me,

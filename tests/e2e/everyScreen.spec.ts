@@ -16,7 +16,9 @@ const NESTED: readonly { readonly role: Role; readonly from: string; readonly op
   { role: 'planner', from: '/rounds', open: /^Import outlines$/ },
   { role: 'planner', from: '/rounds', open: /^Draw a district$/ },
   { role: 'planner', from: '/review', open: /^Open / },
+  { role: 'planner', from: '/listed', open: /^Open / },
   { role: 'contractor', from: '/loads-ahead', open: /^Open / },
+  { role: 'contractor', from: '/listed-buildings', open: /^Open / },
 ]
 
 async function isAtRest(page: Page): Promise<void> {

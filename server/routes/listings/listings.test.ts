@@ -74,7 +74,8 @@ describe('a building with a known day of demolition', () => {
   })
 
   it('is seen by those it was listed to, and by no other contractor', async () => {
-    expect((await call(mine, 'get', '/yard/listings')).body.listings).toHaveLength(1)
+    const seen = (await call(mine, 'get', '/yard/listings')).body.listings
+    expect(seen.map(({ listingId }: { listingId: string }) => listingId)).toContain(listed.listingId)
     expect((await call(rival, 'get', '/yard/listings')).body.listings).toEqual([])
     expect((await call(rival, 'get', `/yard/listings/${listed.listingId}`)).status).toBe(404)
     expect((await call(mine, 'get', `/listings/${listed.listingId}`)).status).toBe(403)
@@ -128,8 +129,8 @@ describe('a building with a known day of demolition', () => {
     )
     const read = await call(mine, 'get', `/yard/listings/${listed.listingId}`)
     expect([read.status, read.body.code]).toEqual([410, 'listing-withdrawn'])
-    expect((await call(mine, 'get', '/yard/listings')).body.listings[0].withdrawalReason).toBe(
-      'The permit was refused.',
-    )
+    const kept = (await call(mine, 'get', '/yard/listings')).body.listings
+    const reasons = kept.map(({ withdrawalReason }: { withdrawalReason: string | null }) => withdrawalReason)
+    expect(reasons).toContain('The permit was refused.')
   })
 })
