@@ -36,6 +36,9 @@ const event = fc.oneof(
     weight: 1,
     arbitrary: fc.record({ kind: fc.constant('clock' as const), phone, byMs: fc.integer({ min: -1e6, max: 1e6 }) }),
   },
+  { weight: 2, arbitrary: fc.record({ kind: fc.constantFrom('photo' as const, 'upload' as const), phone, building }) },
+  { weight: 1, arbitrary: fc.record({ kind: fc.constant('version' as const), phone, isOld: fc.boolean() }) },
+  { weight: 1, arbitrary: fc.record({ kind: fc.constant('shut' as const), person: fc.nat(1), isShut: fc.boolean() }) },
   {
     weight: 1,
     arbitrary: fc.record({
@@ -77,6 +80,7 @@ export function playHistory(events: readonly HistoryEvent[], broken: Break | nul
     for (const one of phones) requireStillThere(server, one)
   }
   drain(server, phones)
+  requirePhotos(server, phones)
   for (const one of phones) {
     requireSettled(server, one)
     requireAccountedFor(server, one)
@@ -89,10 +93,24 @@ const MOST_TURNS = 40
 
 /** Every phone syncs in peace until every bag is empty, and once more to see what the others did. */
 function drain(server: ModelServer, phones: readonly ModelPhone[]): void {
+  server.shut.clear()
+  for (const one of phones) one.isOld = false
   for (let turn = 0; turn < MOST_TURNS && phones.some(({ memory }) => memory.bag.length > 0); turn += 1) {
     for (const one of phones) one.sync(server, 'ok', 3)
   }
+  for (const one of phones) one.upload(server)
   for (const one of phones) one.sync(server, 'ok', 3)
+}
+
+/** Every photo whose record counts is stored. */
+function requirePhotos(server: ModelServer, phones: readonly ModelPhone[]): void {
+  const applied = new Set(server.effects)
+  const wanted = phones.flatMap(({ saved, wiped }) =>
+    saved.flatMap(({ id, act }) => (act.kind === 'photo' && applied.has(id) && !wiped.has(id) ? [act.photoId] : [])),
+  )
+  for (const photoId of wanted) {
+    if (server.district.photos.get(photoId)?.state !== 'stored') throw new Error(`${photoId} is not stored`)
+  }
 }
 
 function play(server: ModelServer, phones: readonly ModelPhone[], happening: HistoryEvent): void {
@@ -106,6 +124,8 @@ function play(server: ModelServer, phones: readonly ModelPhone[], happening: His
       return server.district.assign(happening.beat, `p${happening.person}`)
     case 'move':
       return server.district.move(happening.building, happening.beat)
+    case 'shut':
+      return server.setShut(`p${happening.person}`, happening.isShut)
   }
 }
 
@@ -120,15 +140,52 @@ function playOnPhone(server: ModelServer, one: ModelPhone, happening: Extract<Hi
       return one.save(happening.building, { kind: happening.kind })
     case 'resolve':
       return resolve(one, happening)
+    case 'photo':
+      return one.save(happening.building, { kind: 'photo', photoId: `f${one.name}:${one.saved.length}` })
+    case 'upload':
+      return upload(server, one)
     case 'sync':
-      return one.sync(server, happening.fault, happening.limit)
+      return syncAsAllowed(server, one, happening)
+    default:
+      return befall(one, happening)
+  }
+}
+
+/** What happens to a phone without anybody's work. */
+function befall(
+  one: ModelPhone,
+  happening: Extract<HistoryEvent, { kind: 'copy' | 'restore' | 'clock' | 'version' }>,
+): void {
+  switch (happening.kind) {
     case 'copy':
       return one.keepCopy()
     case 'restore':
       return one.restoreCopy()
+    case 'version':
+      one.isOld = happening.isOld
+      return
     case 'clock':
       one.clockMs += happening.byMs
   }
+}
+
+/** Bytes alone make no photo. */
+function upload(server: ModelServer, one: ModelPhone): void {
+  const before = server.district.photos.size
+  one.upload(server)
+  if (server.district.photos.size > before) throw new Error('a photo came before its record')
+}
+
+/** Whoever is shut out, or has an app that is too old, has no effect. */
+function syncAsAllowed(
+  server: ModelServer,
+  one: ModelPhone,
+  { fault, limit }: Extract<HistoryEvent, { kind: 'sync' }>,
+): void {
+  const before = server.effects.length
+  one.sync(server, fault, limit)
+  const isRefused = one.isOld || server.shut.has(one.personId)
+  if (isRefused && server.effects.length > before) throw new Error(`work of ${one.name} was taken though it is refused`)
 }
 
 function resolve(
@@ -159,7 +216,7 @@ function requireShown(server: ModelServer, one: ModelPhone, { id, sheetId, act }
   const judged = server.judged.get(id)
   if (!judged) throw new Error(`${id} left the bag unjudged`)
   const isHere = one.row('building', sheetId) !== undefined && !one.memory.gone.has(`sheet/${sheetId}`)
-  const shown = one.row('sheet', sheetId)?.change ?? 0
+  const shown = (act.kind === 'photo' ? one.row('photo', act.photoId) : one.row('sheet', sheetId))?.change ?? 0
   const isMissing = judged.status === 'applied' && shown < judged.change
   if (isHere && isMissing && act.kind !== 'resolve') throw new Error(`${id} vanished from the screen`)
 }

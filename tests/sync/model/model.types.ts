@@ -18,6 +18,9 @@ export const BREAKS = [
   'no-exit',
   'no-fill',
   'deletes-unseen',
+  'serves-shut-out',
+  'takes-from-old',
+  'photo-before-record',
 ] as const
 export type Break = (typeof BREAKS)[number]
 
@@ -30,6 +33,7 @@ export interface ModelMutation {
     | { readonly kind: 'set'; readonly set: SheetAnswers; readonly isBad: boolean }
     | { readonly kind: 'delete' }
     | { readonly kind: 'undelete' }
+    | { readonly kind: 'photo'; readonly photoId: string }
     | { readonly kind: 'resolve'; readonly conflictId: string; readonly choice: 'kept' | 'set-aside' }
   /** Clock of the phone; only a broken server looks at it. */
   readonly atMs: number
@@ -49,9 +53,17 @@ export interface ModelSheet {
   readonly change: number
 }
 
+/** A photo: its record first, then its bytes. */
+export interface ModelPhoto {
+  readonly id: string
+  readonly sheetId: string
+  readonly state: 'declared' | 'stored'
+  readonly change: number
+}
+
 /** One row as it is pulled. */
 export interface PulledRow {
-  readonly type: 'building' | 'sheet' | 'conflict'
+  readonly type: 'building' | 'sheet' | 'conflict' | 'photo'
   readonly id: string
   readonly buildingId: string
   /** Beat of the building, as a phone learns it from the building's row. */

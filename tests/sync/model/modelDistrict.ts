@@ -1,6 +1,6 @@
 import { canonicalJson } from '@/shared/sync/canonicalJson'
 import { syncDigest } from '@/shared/sync/syncDigest'
-import type { Break, ModelConflict, ModelCursor, ModelSheet, PulledRow, PullReply } from './model.types'
+import type { Break, ModelConflict, ModelCursor, ModelPhoto, ModelSheet, PulledRow, PullReply } from './model.types'
 
 export const BUILDINGS = ['e1', 'e2', 'e3'] as const
 export const BEATS = ['b1', 'b2'] as const
@@ -16,6 +16,7 @@ export class ModelDistrict {
   head = 0
   readonly sheets = new Map<string, ModelSheet>()
   readonly conflicts = new Map<string, ModelConflict>()
+  readonly photos = new Map<string, ModelPhoto>()
   readonly #beatOf = new Map<string, { beat: string | null; change: number }>()
   readonly #surveyorOf = new Map<string, string>()
   #exits: PulledRow[] = []
@@ -37,6 +38,7 @@ export class ModelDistrict {
     this.#beatOf.set(buildingId, { beat, change: ++this.head })
     for (const { type, id } of leaving) {
       if (type === 'sheet') this.sheets.set(id, { ...this.sheets.get(id)!, change: ++this.head })
+      if (type === 'photo') this.photos.set(id, { ...this.photos.get(id)!, change: ++this.head })
       if (type === 'conflict') this.conflicts.set(id, { ...this.conflicts.get(id)!, change: ++this.head })
     }
     if (before.beat === null || this.broken === 'no-exit') return
@@ -120,6 +122,14 @@ export class ModelDistrict {
         change,
         isGone: record.deletion !== null,
         text: canonicalJson([record.answers, record.state, record.revision]),
+      })),
+      ...[...this.photos.values()].map(({ id, sheetId, state, change }): PulledRow => ({
+        type: 'photo',
+        id,
+        ...place(sheetId),
+        change,
+        isGone: false,
+        text: state,
       })),
       ...[...this.conflicts.values()].map(({ id, sheetId, change, isOpen, aside }): PulledRow => ({
         type: 'conflict',

@@ -29,6 +29,8 @@ const BATCH = 5
 export class ModelPhone {
   memory: Memory
   clockMs = 0
+  /** Its app is older than the server takes: it may pull and not push (P12). */
+  isOld = false
   /** Work that was wiped from the phone by restoring a copy; no protocol can save it unless it was sent. */
   readonly wiped = new Set<string>()
   readonly saved: ModelMutation[] = []
@@ -83,12 +85,26 @@ export class ModelPhone {
   }
 
   sync(server: ModelServer, fault: Fault, limit: number): void {
+    if (server.shut.has(this.personId) && this.broken !== 'serves-shut-out') return
     if (fault === 'ahead') {
+      if (this.#isRefused()) return
       const early = this.#waiting().slice(2, 7)
       if (early.length > 0) server.push(this.memory.deviceId, early)
       return
     }
     if (fault === 'pull-only' || this.#push(server, fault)) this.#pull(server, fault, limit)
+  }
+
+  /** Sends the bytes of its photos, also of some whose record is not there yet. */
+  upload(server: ModelServer): void {
+    if (server.shut.has(this.personId)) return
+    for (const { id, sheetId, act } of this.saved) {
+      if (act.kind === 'photo' && !this.wiped.has(id)) server.store(act.photoId, sheetId)
+    }
+  }
+
+  #isRefused(): boolean {
+    return this.isOld && this.broken !== 'takes-from-old'
   }
 
   #waiting(): ModelMutation[] {
@@ -98,7 +114,7 @@ export class ModelPhone {
   /** @returns whether an answer came that lets the phone go on */
   #push(server: ModelServer, fault: Fault): boolean {
     const batch = this.#waiting().slice(0, BATCH)
-    if (batch.length === 0) return true
+    if (batch.length === 0 || this.#isRefused()) return true
     this.#sent.push(batch)
     if (this.broken === 'ack-on-send') this.#drop(({ id }) => batch.some((entry) => entry.id === id))
     if (fault === 'request-lost') return false

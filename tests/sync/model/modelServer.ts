@@ -21,6 +21,8 @@ export class ModelServer {
   readonly judged = new Map<string, Judged>()
   /** Mutation ids in the order of their effects; none may be in it twice. */
   readonly effects: string[] = []
+  /** People whose account is shut. */
+  readonly shut = new Set<string>()
   readonly #numbers = new Map<string, Map<number, KnownMutation>>()
   readonly #lastSeq = new Map<string, number>()
   readonly #newestMs = new Map<string, number>()
@@ -95,7 +97,8 @@ export class ModelServer {
   }
 
   #apply(deviceId: string, mutation: ModelMutation): number {
-    const { sheetId, seen } = mutation
+    const { sheetId, seen, act } = mutation
+    if (act.kind === 'photo') return this.#declare(act.photoId, sheetId)
     const before = this.district.sheets.get(sheetId)?.record ?? null
     const writing = { deviceId, seen, change: ++this.district.head }
     const merged = this.#merge(before, mutation, writing)
@@ -104,9 +107,32 @@ export class ModelServer {
     return this.district.sheets.get(sheetId)?.change ?? 0
   }
 
+  setShut(personId: string, isShut: boolean): void {
+    if (isShut) this.shut.add(personId)
+    else this.shut.delete(personId)
+  }
+
+  /** A record that comes again for a photo that is there changes nothing of its bytes. */
+  #declare(photoId: string, sheetId: string): number {
+    const { photos } = this.district
+    const change = ++this.district.head
+    photos.set(photoId, { id: photoId, sheetId, state: photos.get(photoId)?.state ?? 'declared', change })
+    return change
+  }
+
+  /** All bytes of a photo have come; before its record nobody knows of it (U1). */
+  store(photoId: string, sheetId: string): void {
+    const { photos } = this.district
+    if (!photos.has(photoId) && this.broken !== 'photo-before-record') return
+    if (photos.get(photoId)?.state === 'stored') return
+    photos.set(photoId, { id: photoId, sheetId, state: 'stored', change: ++this.district.head })
+  }
+
   #merge(before: SheetRecord | null, { act, atMs }: ModelMutation, writing: Writing): MergeResult {
     const sheet = before ?? NEW_SHEET
     switch (act.kind) {
+      case 'photo':
+        return unchanged(sheet)
       case 'set':
         return this.#mergeSet(before, act.set, { ...writing, atMs })
       case 'delete':

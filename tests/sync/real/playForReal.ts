@@ -35,10 +35,17 @@ export async function playForReal(
   for (const phone of town.phones) phone.isForgetful = isForgetful
   for (const phone of town.phones) await phone.sync('ok')
   for (const happening of events) await play(town, happening)
-  for (let turn = 0; turn < 6; turn += 1) for (const phone of town.phones) await phone.sync('ok')
+  await drain(town)
   for (const phone of town.phones) await requireNothingLost(town, phone)
   const [one, two, three, four] = await Promise.all(town.phones.map((phone) => phone.everything()))
   if (one !== three || two !== four) throw new Error('two phones of one person hold different rows')
+}
+
+/** Everybody is let in, every app is of the server's version, and the network holds. */
+async function drain(town: RealTown): Promise<void> {
+  for (const personId of town.surveyorIds) await setShut(town, personId, false)
+  for (const phone of town.phones) phone.isOfAnotherVersion = false
+  for (let turn = 0; turn < 6; turn += 1) for (const phone of town.phones) await phone.sync('ok')
 }
 
 async function buildTown(testApp: TestApp, origin: string): Promise<RealTown> {
@@ -74,6 +81,8 @@ async function play(town: RealTown, happening: HistoryEvent): Promise<void> {
       return shareOut(town, happening.beat, { surveyorId: town.surveyorIds[happening.person] ?? null })
     case 'move':
       return move(town, happening)
+    case 'shut':
+      return setShut(town, town.surveyorIds[happening.person] ?? '', happening.isShut)
   }
 }
 
@@ -96,12 +105,31 @@ async function playOnPhone(
     }
     case 'resolve':
       return resolve(phone, happening)
+    case 'photo':
+      return photograph(phone, idOf(town, happening.building))
+    case 'upload':
+      // Bytes go their own way; here only the records of photos are played.
+      return
     case 'sync':
       return phone.sync(happening.fault)
+    default:
+      return befall(phone, happening)
+  }
+}
+
+/** What happens to a phone without anybody's work. */
+async function befall(
+  phone: RealPhone,
+  happening: Extract<HistoryEvent, { kind: 'copy' | 'restore' | 'clock' | 'version' }>,
+): Promise<void> {
+  switch (happening.kind) {
     case 'copy':
       return phone.keepCopy()
     case 'restore':
       return phone.restoreCopy()
+    case 'version':
+      phone.isOfAnotherVersion = happening.isOld
+      return
     case 'clock':
       // Clocks of phones order nothing; the model turns them.
       return
@@ -123,6 +151,22 @@ async function resolve(
   if (!conflict) return
   const change = { op: 'resolve', type: 'conflict', entity: conflict.id, set: { choice } } as const
   return phone.save(conflict.building_id ?? '', change, conflict.change_no)
+}
+
+function photograph(phone: RealPhone, sheetId: string): Promise<void> {
+  const photoId = randomUUID()
+  const picture = { sha256: 'ab'.repeat(32), bytes: 1_000, mime: 'image/jpeg', widthPx: 4, heightPx: 3 } as const
+  const set = { photoId, sheetId, ...picture, tag: 'street-front', takenAt: '2026-10-13T14:00:00Z' } as const
+  return phone.save(sheetId, { op: 'set', type: 'photo', entity: photoId, set }, 0)
+}
+
+/** All devices of a person are shut out, or let in again. */
+async function setShut({ testApp }: RealTown, personId: string, isShut: boolean): Promise<void> {
+  const revokedAt = isShut ? new Date() : null
+  await testApp.owner.run('UPDATE device SET revoked_at = $revokedAt WHERE person_id = $personId', {
+    revokedAt,
+    personId,
+  })
 }
 
 async function review({ testApp, planner }: RealTown, sheetId: string, state: 'checked' | 'sent-back'): Promise<void> {

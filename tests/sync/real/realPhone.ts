@@ -7,7 +7,8 @@ import type { Driver, SqlValue } from '@/db/driver.types'
 import { migrate } from '@/db/migrate'
 import type { SyncStore } from '@/db/syncStore.types'
 import { renewDevice } from '@/shared/api/sync'
-import { UnreachableError } from '@/sync/api/ApiError'
+import { SYNC_SCHEMA } from '@/shared/schemas/sync'
+import { ApiError, UnreachableError } from '@/sync/api/ApiError'
 import { createApiClient, type ApiClient } from '@/sync/api/createApiClient'
 import { pullChanges } from '@/sync/pullChanges'
 import { pushOutbox } from '@/sync/pushOutbox'
@@ -35,6 +36,8 @@ export class RealPhone {
   readonly wiped = new Set<string>()
   /** Broken on purpose: drops what it sent when no answer comes. */
   isForgetful = false
+  /** Its app speaks a version that the server does not know: it may pull and not push (P12). */
+  isOfAnotherVersion = false
   #fault: Fault = 'ok'
   #copy: Copy | null = null
   #database = new Database(':memory:')
@@ -114,9 +117,15 @@ export class RealPhone {
       enrolAnew: () => this.#enrolAnew(),
     }
     try {
-      if (fault !== 'pull-only') await pushOutbox({ ...parts, onProgress: () => {} })
+      if (fault !== 'pull-only') {
+        await pushOutbox({ ...parts, onProgress: () => {} }).catch((error: unknown) => {
+          if (!(error instanceof ApiError) || error.code !== 'server-too-old') throw error
+        })
+      }
       await pullChanges({ ...parts, onProgress: () => {}, now: () => new Date('2026-10-13T14:08:00Z') })
     } catch (error) {
+      // refused as a whole, nothing taken: the bag stays as it is
+      if (error instanceof ApiError && error.code === 'device-revoked') return
       if (!(error instanceof UnreachableError)) throw error
       if (this.isForgetful) await this.#driver.run('DELETE FROM outbox')
     }
@@ -152,19 +161,30 @@ export class RealPhone {
     return createApiClient({ accessToken: () => this.token, renew: async () => null, origin: this.origin })
   }
 
+  #meetOnTheWay(fault: Fault): void {
+    if (this.#fault === fault) throw new UnreachableError('lost on the way')
+  }
+
+  #asOwnVersion<Input extends { body?: unknown }>(input: Input | undefined): Input | undefined {
+    if (!this.isOfAnotherVersion || input === undefined) return input
+    return { ...input, body: { ...(input.body as object), schema: SYNC_SCHEMA + 1 } }
+  }
+
   /** The first calls of a kind meet the fault; what is asked after an answer was lost is never asked. */
   #api(): ApiClient {
     const plain = this.#plainApi()
     return {
       ...plain,
-      call: async (endpoint, input, signal) => {
+      call: async (endpoint, given, signal) => {
         const isPush = endpoint.method === 'POST'
-        if (isPush && this.#fault === 'request-lost') throw new UnreachableError('lost on the way')
-        if (!isPush && this.#fault === 'pull-lost') throw new UnreachableError('lost on the way')
+        const input = isPush ? this.#asOwnVersion(given) : given
+        this.#meetOnTheWay(isPush ? 'request-lost' : 'pull-lost')
         const first = plain.call(endpoint, input, signal)
+        // it is waited for below, after the second one
+        first.catch(() => undefined)
         if (isPush && this.#fault === 'twice') await plain.call(endpoint, input, signal).catch(() => undefined)
         const answer = await first
-        if (isPush && this.#fault === 'answer-lost') throw new UnreachableError('the answer was lost')
+        if (isPush) this.#meetOnTheWay('answer-lost')
         return answer
       },
     }
