@@ -37,7 +37,7 @@ export function ListingPageScreen({ side, listingId, onBack }: ListingPageScreen
       title={listing?.label ?? t('nav.listed')}
       subtitle={listing ? t('listed.subtitle', { day: formatDate(listing.comesDownOn, locale) }) : undefined}
       onBack={onBack}
-      width="report"
+      width="full"
       right={side === 'desk' && listing?.withdrawnAt === null ? <TakeBack listing={listing} /> : undefined}
     >
       {error ? <ProblemNotice error={error} onRetry={() => void refetch()} /> : null}

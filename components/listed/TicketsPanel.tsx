@@ -1,5 +1,4 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { View } from 'react-native'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { AppText } from '@/components/ui/AppText'
 import { FileButton } from '@/components/ui/FileButton'
@@ -8,7 +7,6 @@ import { Panel } from '@/components/ui/Panel'
 import { useToast } from '@/components/ui/Toast'
 import { giveTickets } from '@/shared/api/listings'
 import type { ListingPage } from '@/shared/schemas/listing'
-import { ApiError } from '@/sync/api/ApiError'
 import { useApi } from '@/sync/react/SessionProvider'
 import { listedKeys } from './listedQueries'
 
@@ -26,20 +24,10 @@ export function TicketsPanel({ listing: { listingId } }: { readonly listing: Lis
       toast(t('listed.ticketsTaken'), 'good')
     },
   })
-  const faults = give.error instanceof ApiError ? (give.error.problem?.faults ?? []) : []
   return (
     <Panel title={t('listed.giveTickets')}>
       <AppText soft>{t('listed.ticketsLead')}</AppText>
       {give.error ? <ProblemNotice error={give.error} isSending /> : null}
-      {faults.length > 0 ? (
-        <View role="list" aria-label={t('listed.ticketFaults')}>
-          {faults.map(({ pointer, detail }) => (
-            <View key={pointer} role="listitem">
-              <AppText tone="error">{detail}</AppText>
-            </View>
-          ))}
-        </View>
-      ) : null}
       <FileButton
         label={t('listed.chooseTickets')}
         accept=".csv,text/csv"

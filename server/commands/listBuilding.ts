@@ -17,7 +17,7 @@ import { recordAudit } from './recordAudit'
  * Lists one building of a finished run with its day of demolition to chosen contractors. Its inventory is frozen, so that
  * what was shown can be compared with what is weighed.
  *
- * @throws {Refusal} `not-found`, `run-not-done`, `input-not-usable` for recipients that are no contractors
+ * @throws {Refusal} `not-found`, `run-not-done`, `already-listed`, `input-not-usable` for recipients that are no contractors
  */
 export function listBuilding(
   { database }: Pick<Context, 'database'>,
@@ -33,6 +33,7 @@ export function listBuilding(
       )
     }
     const building = await readRunBuilding(scope, order.runId, order.buildingId)
+    await refuseSecondListing(scope, order.buildingId)
     await requireContractors(scope, order.recipientIds)
     const { rows } = await readFullEdition(scope, run.editionId)
     const listingId = randomUUID()
@@ -59,6 +60,21 @@ export function listBuilding(
     await recordAudit(scope, { action: 'building-listed', subjectType: 'listing', subjectId: listingId })
     return readListingPage(scope, { listingId })
   })
+}
+
+/** Two inventories of one building would be weighed against the same tonnes. */
+async function refuseSecondListing(scope: Scope, buildingId: string): Promise<void> {
+  const [open] = await scope.select(
+    `SELECT listing_id FROM listing
+     WHERE organisation_id = $organisationId AND building_id = $buildingId AND withdrawn_at IS NULL`,
+    { organisationId: scope.organisationId, buildingId },
+  )
+  if (open) {
+    throw conflictWith(
+      'already-listed',
+      'This building is listed already. Open it in the list, or take it back first; nothing was listed.',
+    )
+  }
 }
 
 async function readRunBuilding(scope: Scope, runId: string, buildingId: string): Promise<RunBuilding> {

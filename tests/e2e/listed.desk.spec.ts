@@ -11,8 +11,8 @@ story(
     await planner.goto(`${appServer.url}/listed`)
     await planner.getByRole('button', { name: 'List a building' }).click()
     const dialog = planner.getByRole('dialog', { name: 'List a building' })
-    await dialog.getByRole('textbox', { name: 'Find the building' }).fill('1')
-    const first = dialog.getByRole('radiogroup', { name: 'Building' }).getByRole('radio').first()
+    await dialog.getByRole('textbox', { name: 'Find the building' }).fill('Street 1')
+    const first = dialog.getByRole('radiogroup', { name: 'Building' }).getByRole('radio').last()
     const label = (await first.innerText()).split(' · ')[0] ?? ''
     await first.click()
     await dialog.getByRole('textbox', { name: 'Comes down on' }).fill('2027-03-01')

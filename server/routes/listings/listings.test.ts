@@ -44,8 +44,14 @@ describe('a building with a known day of demolition', () => {
     const runs = await call(planner, 'get', '/runs')
     runId = runs.body.runs.find(({ state }: { state: string }) => state === 'done').runId
     const map = await call(planner, 'get', `/runs/${runId}/buildings`)
+    const before = await call(planner, 'get', '/listings')
+    const listedIds = new Set(before.body.listings.map(({ buildingId }: { buildingId: string }) => buildingId))
     building = map.body.buildings.find(
-      (one: RunBuilding) => one.yearFrom !== null && (one.yearTo ?? 3000) < 1980 && one.structure !== 'unknown',
+      (one: RunBuilding) =>
+        !listedIds.has(one.buildingId) &&
+        one.yearFrom !== null &&
+        (one.yearTo ?? 3000) < 1980 &&
+        one.structure !== 'unknown',
     )
     const people = await call(planner, 'get', '/people?role=contractor')
     contractorId = people.body.people.find(
@@ -81,8 +87,18 @@ describe('a building with a known day of demolition', () => {
     expect((await call(mine, 'get', `/listings/${listed.listingId}`)).status).toBe(403)
   })
 
+  it('is listed once at a time', async () => {
+    const again = await call(planner, 'post', '/listings', order())
+
+    expect([again.status, again.body.code]).toEqual([409, 'already-listed'])
+  })
+
   it('goes to contractors only, and takes a building of the run only', async () => {
-    expect((await call(planner, 'post', '/listings', order({ recipientIds: [demoId('nobody')] }))).status).toBe(422)
+    const { body } = await call(planner, 'get', `/runs/${runId}/buildings`)
+    const other = body.buildings.at(-1).buildingId
+    expect(
+      (await call(planner, 'post', '/listings', order({ buildingId: other, recipientIds: [demoId('nobody')] }))).status,
+    ).toBe(422)
     expect((await call(planner, 'post', '/listings', order({ buildingId: demoId('nowhere') }))).status).toBe(404)
   })
 
