@@ -145,7 +145,7 @@ describe('where to look next', () => {
         {
           buildingId: BUILDING_ID,
           rank: 2,
-          fallShare: 0.1,
+          settleShare: 0.1,
           reason: { narrows: 'structure', isLarge: true },
           isRecorded: false,
         },

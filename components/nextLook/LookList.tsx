@@ -19,7 +19,7 @@ export function LookList({ ranked: { looks, beats }, fileName }: LookListProps) 
   const names = new Map(beats.map(({ beatId, name }) => [beatId, name]))
   const beatNameOf = (beatId: string | null) => (beatId === null ? t('nextLook.noBeat') : (names.get(beatId) ?? ''))
   let soFar = 0
-  const rows = looks.map((look, place) => ({ ...look, rank: place + 1, shareSoFar: (soFar += look.fallShare) }))
+  const rows = looks.map((look, place) => ({ ...look, rank: place + 1, shareSoFar: (soFar += look.settleShare) }))
   return (
     <Panel title={t('nextLook.list')} note={t('nextLook.listHead')}>
       <DataTable
@@ -75,8 +75,8 @@ export function LookList({ ranked: { looks, beats }, fileName }: LookListProps) 
           {
             key: 'share',
             head: t('nextLook.shareHead'),
-            cell: ({ fallShare }) => formatShare(fallShare, locale),
-            sortBy: ({ fallShare }) => fallShare,
+            cell: ({ settleShare }) => formatShare(settleShare, locale),
+            sortBy: ({ settleShare }) => settleShare,
             align: 'right',
           },
           {

@@ -9,7 +9,7 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { useTheme } from '@/components/ui/theme/ThemeProvider'
 import type { NextLooksReply } from '@/shared/api/nextLook'
-import { formatShare } from '@/shared/format'
+import { formatDecimal } from '@/shared/format'
 import { useApi } from '@/sync/react/SessionProvider'
 import { lookFigureText } from './lookFigureText'
 import { lookOutlinesQuery } from './nextLookQueries'
@@ -37,7 +37,7 @@ export function LookMap({ districtId, districtName, ranked: { looks, figure } }:
       })),
     [read.data],
   )
-  const shares = useMemo(() => new Map(looks.map(({ outlineId, fallShare }) => [outlineId, fallShare])), [looks])
+  const shares = useMemo(() => new Map(looks.map(({ outlineId, settleShare }) => [outlineId, settleShare])), [looks])
   const breaks = useMemo(() => quantileBreaks([...shares.values()], STEPS), [shares])
   const paint = useCallback(
     (id: string): OutlinePaint => {
@@ -47,6 +47,7 @@ export function LookMap({ districtId, districtName, ranked: { looks, figure } }:
     [shares, breaks, colours],
   )
   if (read.error) return <ProblemNotice error={read.error} onRetry={() => void read.refetch()} />
+  const percent = (share: number): string => `${formatDecimal(share * 100, locale, 2)} %`
   const floors = [0, ...breaks]
   return (
     <Panel title={t('nextLook.map', { figure: lookFigureText(figure, t) })} flush>
@@ -62,7 +63,10 @@ export function LookMap({ districtId, districtName, ranked: { looks, figure } }:
             entries={[
               ...floors.map((floor, step) => ({
                 key: String(floor),
-                label: step === 0 ? `< ${formatShare(breaks[0] ?? 1, locale)}` : `≥ ${formatShare(floor, locale)}`,
+                label:
+                  step === 0
+                    ? t('nextLook.legendUnder', { share: percent(breaks[0] ?? 1) })
+                    : t('nextLook.legendFrom', { share: percent(floor) }),
                 colour: rampColour(floor, breaks),
               })),
               { key: 'none', label: t('nextLook.notOnList'), colour: colours.panel },

@@ -31,6 +31,7 @@ export function NowPanel({ ranked }: { readonly ranked: NextLooksReply }) {
           lifetime: formatShare(varianceShares.lifetime, locale),
         })}
       </AppText>
+      {settled < varianceShares.factor ? <AppText tone="attention">{t('nextLook.betterFactors')}</AppText> : null}
       <AppText soft>
         {t('nextLook.nowBasis', { edition: String(run.editionNumber), run: String(run.number) })}
         {run.isOfRound ? '' : ` ${t('nextLook.otherRound')}`}

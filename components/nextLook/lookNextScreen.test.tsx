@@ -31,6 +31,7 @@ const look = (number: number, change: Partial<RankedLook> = {}): RankedLook => (
   meanKg: 50_000,
   fallKg2: 1e9 / number,
   fallShare: 0.1 / number,
+  settleShare: 0.4 / number,
   byAttributeKg2: { floorArea: 1e8, constructionYear: 5e8, structure: 1e8, use: 0 },
   reason: { narrows: 'constructionYear', isLarge: number === 1 },
   ...change,

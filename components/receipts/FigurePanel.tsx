@@ -5,7 +5,7 @@ import { Panel } from '@/components/ui/Panel'
 import { sum } from '@/shared/compute/sum'
 import { formatArea, formatDecimal, formatMass, formatMassRange } from '@/shared/format'
 import type { Receipt } from '@/shared/schemas/receipt'
-import { figureName, groupName } from './receiptNames'
+import { componentName, figureName, groupName } from './receiptNames'
 
 /** Groups written out in the formula; the others follow as one. */
 const WRITTEN_OUT = 4
@@ -64,17 +64,31 @@ function Formula({ receipt: { groups, massKg } }: { readonly receipt: Receipt })
   const [only] = groups
   const mass = (kg: number): string => formatMass(kg, locale)
   if (groups.length === 1 && only) {
-    return only.terms
-      .slice(0, WRITTEN_OUT * 2)
-      .map(({ material, component, countedAreaM2, contentKgPerM2, massKg: termKg }) => (
-        <AppText key={`${material}/${component}`} kind="number">
-          {`${t(`vocabulary.material.${material}`)}: ${t('receipts.formulaLine', {
-            area: formatArea(countedAreaM2, locale),
-            content: formatDecimal(contentKgPerM2, locale, 2),
-            mass: mass(termKg),
-          })}`}
-        </AppText>
-      ))
+    const further = only.terms.slice(WRITTEN_OUT * 2)
+    return (
+      <>
+        {only.terms
+          .slice(0, WRITTEN_OUT * 2)
+          .map(({ material, component, countedAreaM2, contentKgPerM2, massKg: termKg }) => (
+            <AppText key={`${material}/${component}`} kind="number">
+              {`${t(`vocabulary.material.${material}`)}, ${componentName(component, t)}: ${t('receipts.formulaLine', {
+                area: formatArea(countedAreaM2, locale),
+                content: formatDecimal(contentKgPerM2, locale, 2),
+                mass: mass(termKg),
+              })}`}
+            </AppText>
+          ))}
+        {further.length > 0 ? (
+          <AppText kind="number">
+            {t('receipts.formulaRestLines', {
+              mass: mass(sum(further.map((term) => term.massKg))),
+              count: further.length,
+            })}
+          </AppText>
+        ) : null}
+        <Total text={`= ${mass(massKg)}`} />
+      </>
+    )
   }
   const rest = groups.slice(WRITTEN_OUT)
   const restKg = sum(rest.map((group) => group.massKg))
@@ -88,9 +102,15 @@ function Formula({ receipt: { groups, massKg } }: { readonly receipt: Receipt })
       {rest.length > 0 ? (
         <AppText kind="number">{t('receipts.formulaRest', { mass: mass(restKg), count: rest.length })}</AppText>
       ) : null}
-      <AppText kind="number" weight="semibold">
-        {`= ${mass(massKg)}`}
-      </AppText>
+      <Total text={`= ${mass(massKg)}`} />
     </>
+  )
+}
+
+function Total({ text }: { readonly text: string }) {
+  return (
+    <AppText kind="number" weight="semibold">
+      {text}
+    </AppText>
   )
 }

@@ -8,7 +8,6 @@ import { Button } from '@/components/ui/Button'
 import { EmptyState } from '@/components/ui/EmptyState'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Screen } from '@/components/ui/Screen'
-import { SPACE } from '@/components/ui/theme/tokens'
 import { printPage } from '@/components/ui/web/printPage'
 import { webOnly } from '@/components/ui/web/webOnly'
 import type { Receipt, ReceiptFigure } from '@/shared/schemas/receipt'
@@ -50,14 +49,24 @@ function LoadedReceipt({ runId, figure }: { readonly runId: string; readonly fig
       subtitle={data ? `${data.run.districtName} · ${data.run.roundName}` : undefined}
       width="report"
       right={
-        <View style={styles.actions} {...webOnly({ dataSet: { printHide: '' } })}>
-          {isPart ? (
-            <Button kind="quiet" label={t('receipts.upToAll')} href={whole} onPress={() => router.push(whole)} />
-          ) : null}
-          {printPage ? <Button kind="secondary" label={t('receipts.print')} onPress={printPage} /> : null}
-        </View>
+        printPage ? (
+          <View {...webOnly({ dataSet: { printHide: '' } })}>
+            <Button kind="secondary" label={t('receipts.print')} onPress={printPage} />
+          </View>
+        ) : undefined
       }
     >
+      {isPart ? (
+        <View style={styles.up} {...webOnly({ dataSet: { printHide: '' } })}>
+          <Button
+            kind="quiet"
+            icon="back"
+            label={t('receipts.upToAll')}
+            href={whole}
+            onPress={() => router.push(whole)}
+          />
+        </View>
+      ) : null}
       {read.error ? <ProblemNotice error={read.error} onRetry={() => void read.refetch()} /> : null}
       {data ? <Parts receipt={data} /> : read.error ? null : <AppText soft>{t('common.loading')}</AppText>}
       {data ? <RunTitleBlock run={data.run} /> : null}
@@ -81,4 +90,4 @@ function Parts({ receipt }: { readonly receipt: Receipt }) {
   )
 }
 
-const styles = StyleSheet.create({ actions: { flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.small } })
+const styles = StyleSheet.create({ up: { alignItems: 'flex-start' } })

@@ -29,10 +29,11 @@ function deskEntries(t: Translate, waitingCount: number): NavEntry[] {
   return [
     { href: '/district', label: t('nav.district'), icon: 'district' },
     { href: '/rounds', label: t('nav.rounds'), icon: 'rounds' },
-    { href: '/look-next', label: t('nav.lookNext'), icon: 'locate' },
     { href: '/review', label: t('nav.review'), icon: 'review', badge: waitingCount },
     { href: '/stock', label: t('nav.stock'), icon: 'stock' },
     { href: '/years-ahead', label: t('nav.yearsAhead'), icon: 'years-ahead' },
+    { href: '/look-next', label: t('nav.lookNext'), icon: 'locate' },
+    { href: '/compare', label: t('nav.compare'), icon: 'runs' },
     { href: '/publish', label: t('nav.publish'), icon: 'loads' },
     { href: '/listed', label: t('nav.listed'), icon: 'listed' },
     { href: '/factor-book', label: t('nav.factorBook'), icon: 'factor-book' },

@@ -6,7 +6,7 @@ it('shades the first tenth of the list most, down to two fifths less, the rest l
   const looks = Array.from({ length: 20 }, (_, place): DeviceLook => ({
     buildingId: String(place),
     rank: place + 1,
-    fallShare: 0.01,
+    settleShare: 0.01,
     reason: { narrows: 'use', isLarge: false },
     isRecorded: false,
   }))

@@ -13,7 +13,7 @@ const THEN_SHARE = 0.4
  * Shades of the buildings of a beat: the first tenth of the list, down to two fifths, and the rest.
  *
  * @param looks of one beat, the most telling first
- * @example lookShades([{ buildingId: 'a', rank: 3, fallShare: 0.1, reason: { narrows: 'use', isLarge: true }, isRecorded: false }]).get('a') // => 'shadeFirst'
+ * @example lookShades([{ buildingId: 'a', rank: 3, settleShare: 0.1, reason: { narrows: 'use', isLarge: true }, isRecorded: false }]).get('a') // => 'shadeFirst'
  */
 export function lookShades(looks: readonly DeviceLook[]): ReadonlyMap<string, LookShade> {
   return new Map(

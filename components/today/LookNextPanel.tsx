@@ -56,7 +56,7 @@ function Row({ one, list, onOpenSheet }: RowProps) {
   const label = buildingLabel(stored.building.outline)
   const place =
     look && list
-      ? `${t('nextLook.rank', { rank: look.rank, count: list.roundCount })} · ${t('nextLook.share', { share: formatShare(look.fallShare, locale) })}`
+      ? `${t('nextLook.rank', { rank: look.rank, count: list.roundCount })} · ${t('nextLook.share', { share: formatShare(look.settleShare, locale) })}`
       : null
   return (
     <Pressable

@@ -19,7 +19,7 @@ const stored = (buildingId: string, footprintM2: number, state: StoredBuilding['
 const look = (buildingId: string, rank: number, isRecorded = false): DeviceLook => ({
   buildingId,
   rank,
-  fallShare: 0.1 / rank,
+  settleShare: 0.1 / rank,
   reason: { narrows: 'structure', isLarge: false },
   isRecorded,
 })

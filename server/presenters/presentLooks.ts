@@ -5,9 +5,23 @@ import type { DeviceLooks, RankedLook } from '@/shared/schemas/nextLook'
 
 /** The looks of a round in their order; what could not be reached is not on the list, because nobody can look at it. */
 export function presentLooks({ looks }: NextLooks, rows: readonly LookRow[]): RankedLook[] {
+  const listed = reachableLooks(looks, rows)
+  const settledKg2 = listed.reduce((sum, { fallKg2 }) => sum + fallKg2, 0)
+  return listed.map((look) => ({ ...look, settleShare: look.fallKg2 / settledKg2 }))
+}
+
+function reachableLooks(looks: NextLooks['looks'], rows: readonly LookRow[]): Omit<RankedLook, 'settleShare'>[] {
   const rowOf = new Map(rows.map((row) => [row.buildingId, row]))
   return looks.flatMap(
-    ({ buildingId, floorAreaM2, meanKg, wholeKg2, fallShare, byAttributeKg2, reason }): RankedLook[] => {
+    ({
+      buildingId,
+      floorAreaM2,
+      meanKg,
+      wholeKg2,
+      fallShare,
+      byAttributeKg2,
+      reason,
+    }): Omit<RankedLook, 'settleShare'>[] => {
       const row = rowOf.get(buildingId)
       if (!row || row.finding === 'inaccessible') return []
       return [
@@ -32,9 +46,9 @@ export function presentLooks({ looks }: NextLooks, rows: readonly LookRow[]): Ra
 
 /** Of a whole round's list, what lies on the beats of one device. */
 export function presentDeviceLooks(looks: readonly RankedLook[], beatIds: ReadonlySet<string>): DeviceLooks['looks'] {
-  return looks.flatMap(({ buildingId, beatId, fallShare, reason, state }, place) =>
+  return looks.flatMap(({ buildingId, beatId, settleShare, reason, state }, place) =>
     beatId !== null && beatIds.has(beatId)
-      ? [{ buildingId, rank: place + 1, fallShare, reason, isRecorded: state !== 'to-do' }]
+      ? [{ buildingId, rank: place + 1, settleShare, reason, isRecorded: state !== 'to-do' }]
       : [],
   )
 }

@@ -31,7 +31,9 @@ export const rankedLook = z.object({
   meanKg: z.number(),
   /** Expected fall of the variance of the figure [kg²]. */
   fallKg2: z.number(),
+  /** Of the whole variance, and of what all looks of the list settle together [–]. */
   fallShare: z.number(),
+  settleShare: z.number(),
   /** Expected fall if one attribute alone were known [kg²]. */
   byAttributeKg2: z.record(z.enum(LOOK_ATTRIBUTES), z.number()),
   reason: lookReason,
@@ -51,7 +53,8 @@ export const deviceLooks = z.object({
       buildingId: id,
       /** Place in the list of the whole round, from 1. */
       rank: z.number().int(),
-      fallShare: z.number(),
+      /** Of what all looks of the round settle together [–]. */
+      settleShare: z.number(),
       reason: lookReason,
       /** It had a sheet when the list was made: looked at, and still in doubt. */
       isRecorded: z.boolean(),
