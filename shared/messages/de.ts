@@ -2,6 +2,7 @@ import auth from './de/auth.json'
 import bag from './de/bag.json'
 import cautions from './de/cautions.json'
 import common from './de/common.json'
+import comparison from './de/comparison.json'
 import listed from './de/listed.json'
 import loads from './de/loads.json'
 import mail from './de/mail.json'
@@ -22,6 +23,7 @@ export const de = {
   bag,
   cautions,
   common,
+  comparison,
   listed,
   loads,
   mail,

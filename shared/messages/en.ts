@@ -5,6 +5,7 @@ import calibrate from './en/calibrate.json'
 import cautions from './en/cautions.json'
 import common from './en/common.json'
 import devices from './en/devices.json'
+import comparison from './en/comparison.json'
 import district from './en/district.json'
 import errors from './en/errors.json'
 import factorBook from './en/factorBook.json'
@@ -37,6 +38,7 @@ export const en = {
   calibrate,
   cautions,
   common,
+  comparison,
   devices,
   district,
   errors,

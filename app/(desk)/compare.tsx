@@ -1,0 +1,5 @@
+import { CompareScreen } from '@/components/comparison/CompareScreen'
+
+export default function CompareRoute() {
+  return <CompareScreen />
+}
