@@ -40,3 +40,8 @@ export function rowsToEdition(
   }
   return parts
 }
+
+/** How the table `factor_row` names a part of an edition. */
+export function kindOfPart(part: keyof EditionRows): FactorRecord['kind'] {
+  return KINDS.find(([, name]) => name === part)![0]
+}

@@ -10,12 +10,13 @@ interface EditionRow {
   state: Edition['state']
   issued_at: Date | null
   issued_by_name: string | null
+  note: string | null
 }
 
 /** Editions of the factor book, newest first, or the one asked for. */
 export async function readEditions(scope: Scope, editionId?: string): Promise<Edition[]> {
   const rows = await scope.select<EditionRow>(
-    `SELECT e.edition_id, e.number, e.name, e.state, e.issued_at, p.name AS issued_by_name
+    `SELECT e.edition_id, e.number, e.name, e.state, e.issued_at, e.note, p.name AS issued_by_name
      FROM edition e LEFT JOIN person p ON p.organisation_id = e.organisation_id AND p.person_id = e.issued_by
      WHERE e.organisation_id = $organisationId AND ($editionId::uuid IS NULL OR e.edition_id = $editionId::uuid)
      ORDER BY e.number DESC`,
@@ -28,6 +29,7 @@ export async function readEditions(scope: Scope, editionId?: string): Promise<Ed
     state: row.state,
     issuedAt: row.issued_at?.toISOString() ?? null,
     issuedByName: row.issued_by_name,
+    note: row.note,
   }))
 }
 

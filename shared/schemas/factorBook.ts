@@ -101,6 +101,8 @@ export const edition = z.object({
   state: z.enum(['draft', 'issued']),
   issuedAt: moment.nullable(),
   issuedByName: z.string().nullable(),
+  /** What is new in it, in the words of who issued it. */
+  note: z.string().nullable().optional(),
 })
 export type Edition = z.infer<typeof edition>
 
