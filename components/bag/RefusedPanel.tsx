@@ -5,6 +5,8 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { SPACE } from '@/components/ui/theme/tokens'
 import type { BagContents } from '@/db/fieldStore.types'
+import type { Translate } from '@/shared/messages/messages.types'
+import { SHEET_GROUPS } from '@/shared/schemas/sheet'
 
 interface RefusedPanelProps {
   readonly quarantined: BagContents['quarantined']
@@ -24,7 +26,7 @@ export function RefusedPanel({ quarantined, onOpenSheet }: RefusedPanelProps) {
           <AppText>{problem.detail}</AppText>
           {problem.faults.map((fault) => (
             <AppText key={`${fault.pointer} ${fault.code}`} soft>
-              {`${fault.pointer} ${fault.detail}`}
+              {[fieldNameOf(fault.pointer, t), fault.detail].filter(Boolean).join(': ')}
             </AppText>
           ))}
           <Button kind="quiet" label={t('bag.mend', { label })} onPress={() => onOpenSheet(buildingId)} />
@@ -32,6 +34,12 @@ export function RefusedPanel({ quarantined, onOpenSheet }: RefusedPanelProps) {
       ))}
     </Panel>
   )
+}
+
+/** The name of the answer a pointer such as `/set/storeys/aboveGround` leads to; null where it leads to none. */
+function fieldNameOf(pointer: string, t: Translate): string | null {
+  const group = SHEET_GROUPS.find((one) => pointer.split('/').includes(one))
+  return group ? t(`sheet.group.${group}`) : null
 }
 
 const styles = StyleSheet.create({ entry: { paddingTop: SPACE.small, gap: SPACE.tight, alignItems: 'flex-start' } })

@@ -5,13 +5,21 @@ import { Notice } from '@/components/ui/Notice'
 import { Progress } from '@/components/ui/Progress'
 import { Screen } from '@/components/ui/Screen'
 import { useFieldOpening } from '@/sync/react/FieldProvider'
+import { AllWellDialog } from './AllWellDialog'
 
 /** Shows the field once the device's database is open; until then, or if it cannot be, says why. */
 export function FieldDoor({ children }: { readonly children: ReactNode }) {
   const { t } = useMessages()
   const context = useFieldOpening()
   const opening = context?.opening ?? { kind: 'opening' as const }
-  if (opening.kind === 'open') return children
+  if (opening.kind === 'open') {
+    return (
+      <>
+        {children}
+        <AllWellDialog />
+      </>
+    )
+  }
   return (
     <Screen title={t('nav.field')} width="form">
       {opening.kind === 'opening' ? <Progress label={t('me.opening')} share={null} /> : null}

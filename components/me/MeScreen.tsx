@@ -33,7 +33,11 @@ export function MeScreen({ deviceName, onSignIn }: MeScreenProps) {
   const bag = useStored(readBag)
   const { look, isBrightSun, setLook, setBrightSun } = useThemeChoice()
   const { language, setLanguage } = useLanguageChoice()
-  const waiting = (bag?.sheetCount ?? 0) + (bag?.startedCount ?? 0)
+  const waiting = [
+    { key: 'signOutWaiting', count: (bag?.sheetCount ?? 0) + (bag?.startedCount ?? 0) },
+    { key: 'signOutPhotos', count: bag?.photoCount ?? 0 },
+    { key: 'signOutRefused', count: bag?.quarantined.length ?? 0 },
+  ] as const
   return (
     <Screen title={t('me.title')} subtitle={account.name} width="form">
       {mustSignInAgain ? (
@@ -75,7 +79,13 @@ export function MeScreen({ deviceName, onSignIn }: MeScreenProps) {
         <Fact name={t('me.deviceId')} value={session.deviceId()} />
       </Panel>
       <Panel title={t('me.signOut')}>
-        {waiting > 0 ? <AppText weight="semibold">{t('me.signOutWaiting', { count: waiting })}</AppText> : null}
+        {waiting
+          .filter(({ count }) => count > 0)
+          .map(({ key, count }) => (
+            <AppText key={key} weight="semibold">
+              {t(`me.${key}`, { count })}
+            </AppText>
+          ))}
         <AppText soft>{t('me.signOutKeeps')}</AppText>
         <Button kind="secondary" icon="out" label={t('me.signOut')} onPress={() => void session.signOut()} />
       </Panel>

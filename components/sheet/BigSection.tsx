@@ -2,7 +2,6 @@ import { StyleSheet, View } from 'react-native'
 import { AppText } from '@/components/ui/AppText'
 import { CheckBox } from '@/components/ui/CheckBox'
 import { Choice } from '@/components/ui/Choice'
-import { KnownByPicker } from '@/components/ui/KnownByPicker'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { NumberField } from '@/components/ui/NumberField'
 import { Panel } from '@/components/ui/Panel'
@@ -12,6 +11,11 @@ import { STOREYS_IF_UNKNOWN } from '@/shared/schemas/sheetFloorArea'
 import { formatArea, formatDecimal, formatShare } from '@/shared/format'
 import type { KnownBy } from '@/shared/schemas/sheet'
 import type { SectionProps } from './form.types'
+import { Further } from './Further'
+import { GroupKnownBy } from './GroupKnownBy'
+import { HeightFields } from './HeightFields'
+import { UnconfirmedNote } from './UnconfirmedNote'
+import { usableAnswers } from './usableAnswers'
 
 const GROUPS = ['storeys', 'footprint', 'attic', 'basement'] as const
 const SHARES = { none: 0, half: 0.5, whole: 1, unknown: null } as const
@@ -20,14 +24,12 @@ const SHARE_NAMES = ['none', 'half', 'whole', 'unknown'] as const
 
 /** Storeys, footprint, attic and basement, and the gross floor area that follows. */
 export function BigSection(props: SectionProps) {
-  const { answers, offered, faults, answer } = props
+  const { answers, faults, answer } = props
   const { t, locale } = useMessages()
   const { storeys, footprint } = answers
   const done = GROUPS.filter((group) => answers[group] !== undefined).length
-  const isOffered = offered.has('storeys') || offered.has('footprint')
-  const note = t('sheet.answered', { done, total: GROUPS.length })
   return (
-    <Panel title={t('sheet.sections.big')} note={isOffered ? `${note} · ${t('sheet.fromRegister')}` : note}>
+    <Panel title={t('sheet.sections.big')} note={t('sheet.answered', { done, total: GROUPS.length })}>
       <NumberField
         label={t('sheet.storeys')}
         hint={t('sheet.storeysHint')}
@@ -40,15 +42,15 @@ export function BigSection(props: SectionProps) {
           )
         }
         aside={
-          storeys && storeys.aboveGround !== null ? (
-            <KnownByPicker
-              of={t('sheet.storeys')}
-              value={storeys.knownBy ?? null}
-              onChange={(knownBy) => answer('storeys', { ...storeys, knownBy })}
-            />
-          ) : undefined
+          <GroupKnownBy
+            of={t('sheet.storeys')}
+            answer={storeys}
+            isKnown={storeys?.aboveGround !== null}
+            onChange={(next) => answer('storeys', next)}
+          />
         }
       />
+      <UnconfirmedNote {...props} group="storeys" />
       <CheckBox
         label={t('sheet.storeysUnknown')}
         checked={storeys?.aboveGround === null}
@@ -69,27 +71,40 @@ export function BigSection(props: SectionProps) {
           footprintM2 ? answer('footprint', { footprintM2, knownBy: 'measured' }) : undefined
         }
         aside={
-          footprint ? (
-            <KnownByPicker
-              of={t('sheet.footprint')}
-              value={footprint.knownBy}
-              onChange={(knownBy) => answer('footprint', { ...footprint, knownBy })}
-            />
-          ) : undefined
+          <GroupKnownBy
+            of={t('sheet.footprint')}
+            answer={footprint}
+            isKnown
+            onChange={(next) => answer('footprint', next)}
+          />
         }
       />
+      <UnconfirmedNote {...props} group="footprint" />
       {(['attic', 'basement'] as const).map((group) => (
-        <Choice<ShareName>
-          key={group}
-          label={t(`sheet.${group}`)}
-          value={shareName(answers[group])}
-          error={faults[group]}
-          onChange={(name) =>
-            answer(group, { floorShare: SHARES[name], ...(name === 'unknown' ? {} : { knownBy: 'seen' as const }) })
-          }
-          options={SHARE_NAMES.map((name) => ({ value: name, label: t(`sheet.share.${name}`) }))}
-        />
+        <View key={group} style={styles.stack}>
+          <Choice<ShareName>
+            label={t(`sheet.${group}`)}
+            value={shareName(answers[group])}
+            error={faults[group]}
+            onChange={(name) =>
+              answer(group, { floorShare: SHARES[name], ...(name === 'unknown' ? {} : { knownBy: 'seen' as const }) })
+            }
+            options={SHARE_NAMES.map((name) => ({ value: name, label: t(`sheet.share.${name}`) }))}
+            aside={
+              <GroupKnownBy
+                of={t(`sheet.${group}`)}
+                answer={answers[group]}
+                isKnown={answers[group]?.floorShare !== null}
+                onChange={(next) => answer(group, next)}
+              />
+            }
+          />
+          <UnconfirmedNote {...props} group={group} />
+        </View>
       ))}
+      <Further label={t('sheet.heights.title')} isOpenAtFirst={answers.heights !== undefined}>
+        <HeightFields {...props} />
+      </Further>
       <FloorArea {...props} locale={locale} />
     </Panel>
   )
@@ -109,7 +124,8 @@ function shareName(value: SectionProps['answers']['attic']): ShareName | null {
 
 function FloorArea({ answers, locale }: SectionProps & { readonly locale: string }) {
   const { t } = useMessages()
-  const { grossFloorAreaM2, floorAreaCv, footprintM2 } = deriveSheet(answers)
+  const { grossFloorAreaM2, floorAreaCv, footprintM2 } = deriveSheet(usableAnswers(answers))
+  const partCount = answers.parts?.parts.length ?? 0
   if (grossFloorAreaM2 === null || footprintM2 === null) return <AppText soft>{t('sheet.floorAreaMissing')}</AppText>
   const storeys = answers.storeys?.aboveGround ?? null
   const words = t(storeys === null ? 'sheet.floorAreaAssumed' : 'sheet.floorAreaWords', {
@@ -120,7 +136,7 @@ function FloorArea({ answers, locale }: SectionProps & { readonly locale: string
     <View style={styles.row}>
       <View style={styles.words}>
         <AppText weight="semibold">{t('sheet.floorArea')}</AppText>
-        <AppText soft>{words}</AppText>
+        <AppText soft>{partCount > 0 ? t('sheet.floorAreaParts', { count: partCount }) : words}</AppText>
       </View>
       <View>
         <AppText kind="lead" weight="bold" align="right">
@@ -137,4 +153,5 @@ function FloorArea({ answers, locale }: SectionProps & { readonly locale: string
 const styles = StyleSheet.create({
   row: { flexDirection: 'row', gap: SPACE.medium, paddingTop: SPACE.small },
   words: { flex: 1 },
+  stack: { gap: SPACE.small },
 })

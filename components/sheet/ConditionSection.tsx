@@ -1,81 +1,108 @@
-import { AppText } from '@/components/ui/AppText'
-import { CheckBox } from '@/components/ui/CheckBox'
 import { Choice } from '@/components/ui/Choice'
 import { useMessages } from '@/components/ui/MessagesProvider'
-import { Notice } from '@/components/ui/Notice'
 import { Panel } from '@/components/ui/Panel'
-import { hazardSuspicions } from '@/shared/compute/waste/hazardSuspicions'
-import { deriveSheet } from '@/shared/schemas/deriveSheet'
-import { CONDITIONS, VACANCIES, type SheetAnswers } from '@/shared/schemas/sheet'
+import { TextField } from '@/components/ui/TextField'
+import { CONDITIONS, PERMIT_NOTICES, VACANCIES } from '@/shared/schemas/sheet'
 import type { SectionProps } from './form.types'
+import { Further } from './Further'
+import { GroupKnownBy } from './GroupKnownBy'
+import { Suspicions } from './Suspicions'
+import { UnconfirmedNote } from './UnconfirmedNote'
 
 /** A first look at the state of the building, and what is to be suspected at its age. */
 export function ConditionSection(props: SectionProps) {
   const { answers, answer } = props
   const { t } = useMessages()
+  const { condition, vacancy, protection, permitNotice } = answers
   return (
     <Panel title={t('sheet.sections.condition')}>
       <Choice
         label={t('sheet.condition')}
         hint={t('cautions.condition')}
-        value={answers.condition?.condition ?? null}
-        onChange={(condition) =>
-          answer('condition', { condition, ...(condition === 'unknown' ? {} : { knownBy: 'seen' as const }) })
-        }
+        value={condition?.condition ?? null}
+        onChange={(value) => answer('condition', { condition: value, ...seenIf(value !== 'unknown') })}
         options={CONDITIONS.map((value) => ({ value, label: t(`vocabulary.condition.${value}`) }))}
+        aside={
+          <GroupKnownBy
+            of={t('sheet.condition')}
+            answer={condition}
+            isKnown={condition?.condition !== 'unknown'}
+            onChange={(next) => answer('condition', next)}
+          />
+        }
       />
+      <UnconfirmedNote {...props} group="condition" />
       <Choice
         label={t('sheet.vacancy')}
-        value={answers.vacancy?.vacancy ?? null}
-        onChange={(vacancy) =>
-          answer('vacancy', { vacancy, ...(vacancy === 'unknown' ? {} : { knownBy: 'seen' as const }) })
-        }
+        value={vacancy?.vacancy ?? null}
+        onChange={(value) => answer('vacancy', { vacancy: value, ...seenIf(value !== 'unknown') })}
         options={VACANCIES.map((value) => ({ value, label: t(`vocabulary.vacancy.${value}`) }))}
+        aside={
+          <GroupKnownBy
+            of={t('sheet.vacancy')}
+            answer={vacancy}
+            isKnown={vacancy?.vacancy !== 'unknown'}
+            onChange={(next) => answer('vacancy', next)}
+          />
+        }
       />
-      <CheckBox
+      <Choice<'yes' | 'no'>
         label={t('sheet.protected')}
-        checked={answers.protection?.isProtected ?? false}
-        onChange={(isProtected) => answer('protection', { isProtected, knownBy: 'told' })}
+        value={protection ? (protection.isProtected ? 'yes' : 'no') : null}
+        onChange={(value) => answer('protection', { isProtected: value === 'yes', knownBy: 'told' })}
+        options={(['yes', 'no'] as const).map((value) => ({ value, label: t(`common.${value}`) }))}
+        aside={
+          <GroupKnownBy
+            of={t('sheet.protected')}
+            answer={protection}
+            isKnown
+            onChange={(next) => answer('protection', next)}
+          />
+        }
       />
+      <Further label={t('sheet.permit')} isOpenAtFirst={permitNotice !== undefined}>
+        <PermitFields {...props} />
+      </Further>
       <Suspicions {...props} />
     </Panel>
   )
 }
 
-function Suspicions({ answers, answer }: SectionProps) {
+function PermitFields({ answers, answer }: SectionProps) {
   const { t } = useMessages()
-  const elements = suspectedElements(answers)
-  const seen = answers.suspicions?.seen ?? []
-  if (elements.length === 0) return null
+  const permit = answers.permitNotice
+  const names = permit?.notice !== undefined && permit.notice !== 'none' && permit.notice !== 'unknown'
   return (
     <>
-      <Notice
-        tone="attention"
-        whatHappened={t('sheet.suspicions')}
-        whatIsSafe={t('cautions.suspicion')}
-        whatToDo={t('cautions.doNotTouch')}
+      <Choice
+        label={t('sheet.permitNotice')}
+        value={permit?.notice ?? null}
+        onChange={(notice) =>
+          answer('permitNotice', { notice, reference: permit?.reference ?? '', ...seenIf(notice !== 'unknown') })
+        }
+        options={PERMIT_NOTICES.map((value) => ({ value, label: t(`sheet.permitNotices.${value}`) }))}
+        aside={
+          <GroupKnownBy
+            of={t('sheet.permitNotice')}
+            answer={permit}
+            isKnown={permit?.notice !== 'unknown'}
+            onChange={(next) => answer('permitNotice', next)}
+          />
+        }
       />
-      <AppText soft>{t('cautions.stayOutside')}</AppText>
-      {elements.map((element) => (
-        <CheckBox
-          key={element}
-          label={t('sheet.suspicionSeen', { element })}
-          checked={seen.includes(element)}
-          onChange={(isSeen) =>
-            answer('suspicions', { seen: isSeen ? [...seen, element] : seen.filter((one) => one !== element) })
-          }
+      {permit && names ? (
+        <TextField
+          label={t('sheet.permitReference')}
+          hint={t('sheet.permitReferenceHint')}
+          maxLength={120}
+          value={permit.reference}
+          onChange={(reference) => answer('permitNotice', { ...permit, reference })}
         />
-      ))}
+      ) : null}
     </>
   )
 }
 
-/** Only for years that are answered: at an age not known everything would be suspected. */
-function suspectedElements(answers: SheetAnswers): readonly string[] {
-  const { yearFrom, yearTo } = deriveSheet(answers)
-  if (yearFrom === null || yearTo === null || yearFrom > yearTo || yearFrom < 1000) return []
-  const found = hazardSuspicions({ construction: { fromYear: yearFrom, toYear: yearTo + 1 } })
-  return found
-    .filter(({ because }) => because === 'built-then')
-    .map(({ row }) => `${row.substance}: ${row.element}`.slice(0, 120))
+function seenIf(isKnown: boolean): { knownBy?: 'seen' } {
+  return isKnown ? { knownBy: 'seen' } : {}
 }

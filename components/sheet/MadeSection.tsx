@@ -1,10 +1,13 @@
 import { Swatch } from '@/components/charts/Swatch'
 import { Choice } from '@/components/ui/Choice'
-import { KnownByPicker } from '@/components/ui/KnownByPicker'
 import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { STRUCTURES, type Material, type Structure } from '@/shared/compute/factors/vocabulary'
 import type { SectionProps } from './form.types'
+import { Further } from './Further'
+import { GroupKnownBy } from './GroupKnownBy'
+import { ShellFields } from './ShellFields'
+import { UnconfirmedNote } from './UnconfirmedNote'
 
 const HATCH_OF: Readonly<Record<Structure, Material>> = {
   'reinforced-concrete': 'concrete',
@@ -18,10 +21,11 @@ const HATCH_OF: Readonly<Record<Structure, Material>> = {
   earth: 'mortar-plaster',
 }
 
-/** What carries the building. */
-export function MadeSection({ answers, faults, answer }: SectionProps) {
+/** What carries the building, and what covers it. */
+export function MadeSection(props: SectionProps) {
+  const { answers, faults, answer } = props
   const { t } = useMessages()
-  const structure = answers.structure
+  const { structure, roof, facade, openings } = answers
   return (
     <Panel title={t('sheet.sections.made')} note={t('sheet.structureNote')}>
       <Choice
@@ -37,15 +41,18 @@ export function MadeSection({ answers, faults, answer }: SectionProps) {
           ...(value === 'unknown' ? {} : { swatch: <Swatch material={HATCH_OF[value]} size={22} /> }),
         }))}
         aside={
-          structure && structure.structure !== 'unknown' ? (
-            <KnownByPicker
-              of={t('sheet.structure')}
-              value={structure.knownBy ?? null}
-              onChange={(knownBy) => answer('structure', { ...structure, knownBy })}
-            />
-          ) : undefined
+          <GroupKnownBy
+            of={t('sheet.structure')}
+            answer={structure}
+            isKnown={structure?.structure !== 'unknown'}
+            onChange={(next) => answer('structure', next)}
+          />
         }
       />
+      <UnconfirmedNote {...props} group="structure" />
+      <Further label={t('sheet.shell')} isOpenAtFirst={Boolean(roof ?? facade ?? openings)}>
+        <ShellFields {...props} />
+      </Further>
     </Panel>
   )
 }

@@ -7,12 +7,16 @@ import { Panel } from '@/components/ui/Panel'
 import { SPACE } from '@/components/ui/theme/tokens'
 import type { ConstructionYear } from '@/shared/schemas/sheet'
 import type { SectionProps } from './form.types'
+import { Further } from './Further'
+import { Refurbishments } from './Refurbishments'
+import { UnconfirmedNote } from './UnconfirmedNote'
 
 const KINDS = ['exact', 'between', 'unknown'] as const
 type Kind = (typeof KINDS)[number]
 
-/** The construction year: exact, between two years, or not known. */
-export function OldSection({ answers, offered, faults, answer }: SectionProps) {
+/** The construction year: exact, between two years, or not known; and what was renewed since. */
+export function OldSection(props: SectionProps) {
+  const { answers, faults, answer } = props
   const { t } = useMessages()
   const year = answers.constructionYear
   const setYear = (next: ConstructionYear) => answer('constructionYear', next)
@@ -29,7 +33,7 @@ export function OldSection({ answers, offered, faults, answer }: SectionProps) {
     </View>
   )
   return (
-    <Panel title={t('sheet.sections.old')} note={offered.has('constructionYear') ? t('sheet.fromRegister') : undefined}>
+    <Panel title={t('sheet.sections.old')}>
       <Choice<Kind>
         label={t('sheet.year')}
         value={year?.kind ?? null}
@@ -57,6 +61,10 @@ export function OldSection({ answers, offered, faults, answer }: SectionProps) {
           </>
         ) : null}
       </View>
+      <UnconfirmedNote {...props} group="constructionYear" />
+      <Further label={t('sheet.renewed')} isOpenAtFirst={(answers.refurbishments?.done.length ?? 0) > 0}>
+        <Refurbishments {...props} />
+      </Further>
     </Panel>
   )
 }

@@ -6,18 +6,16 @@ import { Choice } from '@/components/ui/Choice'
 import { FileButton } from '@/components/ui/FileButton'
 import { IconButton } from '@/components/ui/IconButton'
 import { useMessages } from '@/components/ui/MessagesProvider'
-import { Notice } from '@/components/ui/Notice'
 import { Panel } from '@/components/ui/Panel'
 import { SPACE } from '@/components/ui/theme/tokens'
 import type { FieldStore, StoredPhoto } from '@/db/fieldStore.types'
-import { newId } from '@/db/newId'
 import { PHOTO_TAGS, type PhotoMeta } from '@/shared/schemas/sheet'
 import { useField, useStored } from '@/sync/react/FieldProvider'
 import { CameraDialog } from './CameraDialog'
-import { preparePhoto } from './preparePhoto'
+import { PhotoFaults } from './PhotoFaults'
+import { MOST_PHOTOS, usePhotoIntake } from './usePhotoIntake'
 
 type Tag = PhotoMeta['tag']
-const MOST_PHOTOS = 12
 
 interface PhotosSectionProps {
   readonly sheetId: string
@@ -28,28 +26,10 @@ interface PhotosSectionProps {
 /** Up to twelve photos, each redrawn without metadata and kept at once. */
 export function PhotosSection({ sheetId, isCameraOpen, onCamera }: PhotosSectionProps) {
   const { t } = useMessages()
-  const { store } = useField()
   const photos = useStored(useCallback((from: FieldStore) => from.listPhotos(sheetId), [sheetId])) ?? []
   const [tag, setTag] = useState<Tag>('street-front')
-  const [fault, setFault] = useState<string | null>(null)
-  const [isBusy, setIsBusy] = useState(false)
+  const { take, remove, faults, isBusy } = usePhotoIntake(sheetId)
   const isFull = photos.length >= MOST_PHOTOS
-
-  const take = async (files: readonly Blob[]) => {
-    setIsBusy(true)
-    setFault(null)
-    try {
-      for (const file of files.slice(0, MOST_PHOTOS - photos.length)) {
-        const { bytes, ...picture } = await preparePhoto(file)
-        const takenAt = new Date().toISOString()
-        await store.addPhoto({ photoId: newId(), sheetId, ...picture, bytes: bytes.length, tag, takenAt }, bytes)
-      }
-    } catch (error) {
-      setFault(error instanceof Error ? error.message : String(error))
-    } finally {
-      setIsBusy(false)
-    }
-  }
   return (
     <Panel title={t('sheet.sections.photos')} note={t('common.photos', { count: photos.length })}>
       {photos.length === 0 ? <AppText soft>{t('sheet.photosNone')}</AppText> : null}
@@ -59,19 +39,11 @@ export function PhotosSection({ sheetId, isCameraOpen, onCamera }: PhotosSection
             key={stored.photo.photoId}
             stored={stored}
             number={index + 1}
-            onRemove={() => void store.removePhoto(stored.photo.photoId)}
+            onRemove={() => void remove(stored.photo.photoId)}
           />
         ))}
       </View>
-      {fault ? (
-        <Notice
-          tone="error"
-          urgent
-          whatHappened={t('sheet.photoFault', { reason: fault })}
-          whatIsSafe={t('sheet.photoFaultSafe')}
-          whatToDo={t('sheet.photoFaultToDo')}
-        />
-      ) : null}
+      <PhotoFaults faults={faults} />
       {isFull ? <AppText soft>{t('sheet.photoMost')}</AppText> : null}
       <Choice<Tag>
         label={t('sheet.photoTag')}
@@ -96,7 +68,7 @@ export function PhotosSection({ sheetId, isCameraOpen, onCamera }: PhotosSection
           accept="image/*"
           multiple
           disabled={isFull}
-          onFiles={(files) => void take(files)}
+          onFiles={(files) => take(files, tag)}
         />
       </View>
       <CameraDialog
@@ -104,7 +76,7 @@ export function PhotosSection({ sheetId, isCameraOpen, onCamera }: PhotosSection
         onClose={() => onCamera(false)}
         onPicture={(picture) => {
           onCamera(false)
-          void take([picture])
+          take([picture], tag)
         }}
       />
     </Panel>

@@ -2,8 +2,8 @@ import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { Badge } from '@/components/ui/Badge'
 import { Button } from '@/components/ui/Button'
 import { EmptyState } from '@/components/ui/EmptyState'
+import { IconButton } from '@/components/ui/IconButton'
 import { useMessages } from '@/components/ui/MessagesProvider'
-import { Notice } from '@/components/ui/Notice'
 import { Panel } from '@/components/ui/Panel'
 import { Progress } from '@/components/ui/Progress'
 import { Screen } from '@/components/ui/Screen'
@@ -22,7 +22,10 @@ import { EstimatePanel } from './EstimatePanel'
 import { MadeSection } from './MadeSection'
 import { OldSection } from './OldSection'
 import { PhotosSection } from './PhotosSection'
+import { PartsSection } from './PartsSection'
 import { sectionFaults } from './sectionFaults'
+import { SheetNotices } from './SheetNotices'
+import { SheetStart } from './SheetStart'
 import { usableAnswers } from './usableAnswers'
 import { useSheetForm } from './useSheetForm'
 import { WhatSection } from './WhatSection'
@@ -75,9 +78,10 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
   const usable = useMemo(() => usableAnswers(form.answers), [form.answers])
   const sections = {
     answers: form.answers,
-    offered: form.offered,
+    unconfirmed: form.unconfirmed,
     faults: sectionFaults(form.unready, form.answers, t),
     answer: form.answer,
+    confirm: form.confirm,
   }
   const stands = !form.answers.finding || form.answers.finding.kind === 'standing'
   const finish = async () => {
@@ -102,6 +106,7 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
       right={<Badge label={t('sheet.rev', { letter: revisionLetter(stored.nextRevision) })} tone="selection" />}
       footer={
         <>
+          <IconButton icon="undo" framed label={t('sheet.undo')} disabled={!form.canUndo} onPress={form.undo} />
           <Button
             kind="secondary"
             grow
@@ -113,12 +118,14 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
       }
       aside={<EstimatePanel answers={usable} />}
     >
-      <SheetNotices stored={stored} form={form} />
+      <SheetNotices stored={stored} keeping={form.keeping} unready={form.unready} />
+      <SheetStart {...sections} buildingId={buildingId} onOffer={form.offer} />
       <WhereSection {...sections} />
       {stands ? (
         <>
           <WhatSection {...sections} />
-          <BigSection {...sections} answers={usableForArea(form.answers, usable)} />
+          <BigSection {...sections} />
+          <PartsSection {...sections} />
           <OldSection {...sections} />
           <MadeSection {...sections} />
           <ConditionSection {...sections} />
@@ -138,48 +145,6 @@ function SheetForm({ buildingId, stored, onBack }: SheetFormProps) {
       </Panel>
       <SheetTitleBlock stored={stored} label={label} />
     </Screen>
-  )
-}
-
-/** The area is drawn from what holds; the fields show what is typed. */
-function usableForArea<Answers extends object>(typed: Answers, usable: Answers): Answers {
-  return { ...typed, ...usable }
-}
-
-interface SheetNoticesProps {
-  readonly stored: StoredSheet
-  readonly form: ReturnType<typeof useSheetForm>
-}
-
-function SheetNotices({ stored, form }: SheetNoticesProps) {
-  const { t } = useMessages()
-  const { question } = stored.building
-  const open = stored.conflicts.filter(({ state }) => state === 'open').length
-  return (
-    <>
-      {question ? (
-        <Notice tone="error" whatHappened={`${t('sheet.question')}: ${t('today.question', { question })}`} />
-      ) : null}
-      {open > 0 ? <Notice tone="attention" whatHappened={t('sheet.conflicts', { count: open })} /> : null}
-      {form.keeping.kind === 'failed' ? (
-        <Notice
-          tone="error"
-          urgent
-          whatHappened={t('sheet.notKept', { reason: form.keeping.reason ?? '' })}
-          whatIsSafe={t('sheet.notKeptSafe')}
-          whatToDo={t('sheet.notKeptToDo')}
-        />
-      ) : null}
-      {form.unready.length > 0 ? (
-        <Notice
-          tone="attention"
-          urgent
-          whatHappened={t('sheet.missing', {
-            groups: form.unready.map((group) => t(`sheet.group.${group}`)).join(', '),
-          })}
-        />
-      ) : null}
-    </>
   )
 }
 

@@ -1,9 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { EditionForDevice, IntensityRow } from '@/shared/schemas/factorBook'
 import type { SheetAnswers } from '@/shared/schemas/sheet'
-import { answersFromRegister } from './answersFromRegister'
 import { estimateSheet } from './estimateSheet'
-import { usableAnswers } from './usableAnswers'
 
 const house: SheetAnswers = {
   footprint: { footprintM2: 100, knownBy: 'measured' },
@@ -69,27 +67,18 @@ describe('estimateSheet', () => {
     expect(estimateSheet({}, edition(row({})))).toBeNull()
     expect(estimateSheet({ ...house, finding: { kind: 'cleared', clearedYear: null } }, edition(row({})))).toBeNull()
   })
-})
 
-describe('usableAnswers', () => {
-  it('leaves out what is only half typed', () => {
-    const typed: SheetAnswers = { ...house, storeys: { aboveGround: 0.2, knownBy: 'seen' } }
+  it('tallies each use and each part with its own factor', () => {
+    const book = edition(row({ use: 'office' }), row({ use: 'retail', meanKgPerM2: 100 }))
+    const shared: SheetAnswers = { ...house, use: { use: 'office', otherUses: [{ use: 'retail', share: 0.25 }] } }
 
-    expect(usableAnswers(typed).storeys).toBeUndefined()
-    expect(usableAnswers(typed).use).toEqual(house.use)
+    // 200 m²: 150 × 50 and 50 × 100
+    expect(estimateSheet(shared, book)?.massKg).toBe(12_500)
   })
-})
 
-describe('answersFromRegister', () => {
-  it('offers what the register says and marks it as such', () => {
-    const register = { year: 1905, storeys: 3.2, heightM: null, use: null }
-    const outline = { outlineId: '', reference: 'R-1', street: null, houseNumber: null, footprintM2: 80, blockId: null }
+  it('asks for the storeys where they are only guessed and the rest is known', () => {
+    const guessed: SheetAnswers = { ...house, storeys: { aboveGround: 2, knownBy: 'guessed' } }
 
-    expect(answersFromRegister({ ...outline, register })).toEqual({
-      finding: { kind: 'standing' },
-      footprint: { footprintM2: 80, knownBy: 'register' },
-      storeys: { aboveGround: 3, knownBy: 'register' },
-      constructionYear: { kind: 'exact', year: 1905, knownBy: 'register' },
-    })
+    expect(estimateSheet(guessed, edition(row({})))?.narrowedBy).toBe('storeys')
   })
 })

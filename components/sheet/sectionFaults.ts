@@ -11,13 +11,21 @@ export function sectionFaults(
   return Object.fromEntries(unready.map((group) => [group, faultOf(group, answers, t)]))
 }
 
+const FAULT_OF = {
+  constructionYear: 'sheet.yearFault',
+  finding: 'sheet.yearFault',
+  refurbishments: 'sheet.yearFault',
+  storeys: 'sheet.storeysHint',
+  parts: 'sheet.parts.fault',
+  use: 'sheet.mainUseNoShare',
+  heights: 'sheet.heights.fault',
+} as const satisfies Partial<Record<SheetGroup, string>>
+
 function faultOf(group: SheetGroup, answers: SheetAnswers, t: Translate): string {
   if (answers[group] === undefined) return t('common.notAnswered')
   const year = answers.constructionYear
   if (group === 'constructionYear' && year?.kind === 'between' && year.fromYear > year.toYear && year.toYear >= 1000) {
     return t('sheet.yearOrder')
   }
-  if (group === 'constructionYear' || group === 'finding') return t('sheet.yearFault')
-  if (group === 'storeys') return t('sheet.storeysHint')
-  return t('common.notANumber')
+  return t(group in FAULT_OF ? FAULT_OF[group as keyof typeof FAULT_OF] : 'common.notANumber')
 }

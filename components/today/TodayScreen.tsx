@@ -13,6 +13,7 @@ import { SPACE } from '@/components/ui/theme/tokens'
 import type { FieldStore, StoredBeat, StoredBuilding } from '@/db/fieldStore.types'
 import { formatCount, formatDate } from '@/shared/format'
 import { useField, useHandInState, useStored } from '@/sync/react/FieldProvider'
+import { WalkPanel } from '@/components/field/WalkPanel'
 import { BagPanel } from './BagPanel'
 import { LookNextPanel } from './LookNextPanel'
 import { SentBackPanel } from './SentBackPanel'
@@ -106,6 +107,7 @@ function TodayOfBeat({ beats, current, onChoose, onOpenSheet, onOpenStreet, onOp
       ) : (
         <AppText soft>{t('common.loading')}</AppText>
       )}
+      <WalkPanel />
     </Screen>
   )
 }
