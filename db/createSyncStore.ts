@@ -1,7 +1,7 @@
 import type { MutationOutcome } from '@/shared/schemas/sync'
 import type { Problem } from '@/shared/schemas/problem'
 import type { SheetAnswers } from '@/shared/schemas/sheet'
-import { syncDigest } from '@/shared/sync/syncDigest'
+import { syncDigest, type SyncDigest } from '@/shared/sync/syncDigest'
 import { applyPage } from './applyPage'
 import type { Driver, Statements } from './driver.types'
 import { evictPhotos } from './evictPhotos'
@@ -29,6 +29,9 @@ export interface SyncStoreParts {
 /** The device's database as handing in uses it. */
 export function createSyncStore(parts: SyncStoreParts): SyncStore {
   const { driver, photoFiles, twin, owner, now, changed, subscribe } = parts
+  /** Of the rows as they are; null after a page that may have changed them. */
+  let digest: SyncDigest | null = null
+  let lastBeats = ''
   const write = async (work: (inside: Statements) => Promise<void>): Promise<void> => {
     await driver.transaction(work)
     changed()
@@ -50,7 +53,12 @@ export function createSyncStore(parts: SyncStoreParts): SyncStore {
       const ofRebuild = await readMeta(driver, 'rebuildCursor')
       return ofRebuild === null ? readMeta(driver, 'cursor') : ofRebuild || null
     },
-    applyPage: (page) => write((inside) => applyPage(inside, page)),
+    async applyPage(page) {
+      const beats = page.beatIds.join()
+      if (page.changes.length > 0 || beats !== lastBeats) digest = null
+      lastBeats = beats
+      await write((inside) => applyPage(inside, page))
+    },
     async dropConfirmed(ackSeq, at) {
       await write((inside) => dropConfirmed(inside, ackSeq, at))
       // what the twin holds too much is handed in once more at worst, and known there by its id
@@ -60,18 +68,26 @@ export function createSyncStore(parts: SyncStoreParts): SyncStore {
       return (await parts.readRoom()).level === 'roomy' ? 0 : evictPhotos(driver, photoFiles)
     },
     makeBagFile: () => makeBagFile(driver, owner, now()),
-    markSurrendered: (sha256) => write((inside) => markSurrendered(inside, sha256, now())),
+    markSurrendered(sha256) {
+      digest = null
+      return write((inside) => markSurrendered(inside, sha256, now()))
+    },
     readSurrendered: () => readMeta(driver, 'surrenderedAt'),
     isKeyEnrolled: async (deviceId) => (await readMeta(driver, 'keyEnrolledFor')) === deviceId,
     noteKeyEnrolled: (deviceId) => driver.transaction((inside) => writeMeta(inside, 'keyEnrolledFor', deviceId)),
     async baseDigest() {
-      return syncDigest(await driver.all<{ id: string; change: number }>('SELECT id, change_no AS change FROM base'))
+      digest ??= syncDigest(
+        await driver.all<{ id: string; change: number }>('SELECT id, change_no AS change FROM base'),
+      )
+      return digest
     },
-    startRebuild: () =>
-      driver.transaction(async (inside) => {
+    startRebuild() {
+      digest = null
+      return driver.transaction(async (inside) => {
         await inside.run('DELETE FROM base_next')
         await writeMeta(inside, 'rebuildCursor', '')
-      }),
+      })
+    },
     async nextPhotos(most) {
       const rows = await driver.all<PhotoRow>(
         `SELECT * FROM photo WHERE place = 'kept-here' AND is_removed = 0 AND NOT EXISTS (

@@ -63,7 +63,7 @@ describe('the route table', () => {
     }
   })
 
-  it('knows no ids that nobody has: every addressed thing is not found, or its input is refused', async () => {
+  it('M2 knows no ids that nobody has: every addressed thing is not found, or its input is refused', async () => {
     for (const role of ROLES) {
       const { bearer } = await signInAs(testApp, await buildPerson(testApp, { roles: [role] }))
       for (const [name, { method, path, audience }] of endpoints) {

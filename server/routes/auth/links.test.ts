@@ -110,7 +110,7 @@ describe('an invitation', () => {
 })
 
 describe('a password reset', () => {
-  it('answers alike for known and unknown addresses, and mails only the known', async () => {
+  it('M15 answers alike for known and unknown addresses, and mails only the known', async () => {
     const person = await buildPerson(testApp)
     const disabled = await buildPerson(testApp, { status: 'disabled' })
     testApp.context.mailer.messages.length = 0

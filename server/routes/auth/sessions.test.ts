@@ -40,7 +40,7 @@ describe('rotation', () => {
     expect((await account(answer.body.accessToken)).status).toBe(200)
   })
 
-  it('gives the same successor when the same rotation is asked again, however late', async () => {
+  it('F10 gives the same successor when the same rotation is asked again, however late', async () => {
     const person = await signedInPerson()
     const rotation = rotationId()
 
@@ -53,7 +53,7 @@ describe('rotation', () => {
     expect((await refresh(cookieOf(again), rotationId())).status).toBe(200)
   })
 
-  it('gives one successor to two requests of the same rotation at the same time', async () => {
+  it('F10 gives one successor to two requests of the same rotation at the same time', async () => {
     const person = await signedInPerson()
     const rotation = rotationId()
 
@@ -63,7 +63,7 @@ describe('rotation', () => {
     expect(new Set(answers.map(cookieOf)).size).toBe(1)
   })
 
-  it('ends the family when a spent token comes with another rotation, and refuses the honest holder too', async () => {
+  it('F11 ends the family when a spent token comes with another rotation, and refuses the honest holder too', async () => {
     const person = await signedInPerson()
     const honest = await refresh(person.cookie, rotationId())
 
@@ -82,7 +82,7 @@ describe('rotation', () => {
     expect(audit.at(-1)).toEqual({ action: 'refresh-token-reused' })
   })
 
-  it('ends the family when a lost rotation is repeated after its successor was used', async () => {
+  it('F11 ends the family when a lost rotation is repeated after its successor was used', async () => {
     const person = await signedInPerson()
     const rotation = rotationId()
     const child = await refresh(person.cookie, rotation)
@@ -145,7 +145,7 @@ describe('rotation', () => {
   })
 })
 
-describe('the guard of cookie addresses', () => {
+describe('M14 the guard of cookie addresses', () => {
   const from = (origin: string, host?: string) => {
     const asked = testApp.http.post('/api/v1/auth/sign-out').set('Origin', origin)
     return host === undefined ? asked : asked.set('Host', host)

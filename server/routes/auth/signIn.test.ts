@@ -58,7 +58,7 @@ describe('signing in', () => {
     expect(answer.get('Strict-Transport-Security')).toBe('max-age=31536000')
   })
 
-  it('answers alike to a wrong password, an unknown address, an invited and a disabled person', async () => {
+  it('M15 answers alike to a wrong password, an unknown address, an invited and a disabled person', async () => {
     const person = await buildPerson(testApp)
     const invited = await buildPerson(testApp, { status: 'invited' })
     const disabled = await buildPerson(testApp, { status: 'disabled' })
@@ -177,7 +177,7 @@ describe('an access token', () => {
       ...options,
     })
 
-  it('opens nothing when it was forged, is of another kind, for another audience, or has run out', async () => {
+  it('M11 opens nothing when it was forged, is of another kind, for another audience, or has run out', async () => {
     const { token } = await signInAs(testApp, await buildPerson(testApp))
     const nowS = Math.floor(testApp.context.now().getTime() / 1000)
     const [head, claims] = token.split('.')
