@@ -6,6 +6,7 @@ import { m0005OutlineBlocks } from './m0005OutlineBlocks'
 import { m0006Sync } from './m0006Sync'
 import { m0007SheetKeys } from './m0007SheetKeys'
 import { m0008SheetRecorder } from './m0008SheetRecorder'
+import { m0009EditionDrafts } from './m0009EditionDrafts'
 import { m0011LookFigure } from './m0011LookFigure'
 import { m0014BagSafety } from './m0014BagSafety'
 import { m0014SheetKeysBack } from './m0014SheetKeysBack'
@@ -23,6 +24,7 @@ export const allMigrations: readonly Migration[] = [
   m0006Sync,
   m0007SheetKeys,
   m0008SheetRecorder,
+  m0009EditionDrafts,
   m0011LookFigure,
   m0014BagSafety,
   m0014SheetKeysBack,
