@@ -50,6 +50,8 @@ interface PartProps {
 function InputsPanel({ loaded, nameOf }: PartProps) {
   const { t } = useMessages()
   const rows = differingInputs(loaded.map(({ run }) => run))
+  const worded = (value = ''): string =>
+    value === 'true' || value === 'false' ? t(value === 'true' ? 'common.yes' : 'common.no') : value
   return (
     <Panel title={t('comparison.why')} note={t('comparison.whyNote')}>
       <DataTable
@@ -70,7 +72,7 @@ function InputsPanel({ loaded, nameOf }: PartProps) {
             weight: 2,
             minWidth: 120,
             cell: ({ values, differs }) => (
-              <AppText weight={differs ? 'semibold' : undefined}>{values[place] ?? ''}</AppText>
+              <AppText weight={differs ? 'semibold' : undefined}>{worded(values[place])}</AppText>
             ),
           })),
         ]}

@@ -66,8 +66,8 @@ export function InventoryTable({ inventory: { lines }, fileName }: InventoryTabl
         {
           key: 'ask',
           head: t('listed.test'),
-          weight: 2,
-          minWidth: 150,
+          weight: 3,
+          minWidth: 250,
           cell: ({ mustAsk, alternatives }) =>
             mustAsk ? (
               <Badge tone="attention" label={t('listed.mustAsk', { codes: alternatives.join(', ') })} />

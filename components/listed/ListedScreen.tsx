@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
+import { StyleSheet, View } from 'react-native'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { useChosenRun } from '@/components/runs/useChosenRun'
 import { AppText } from '@/components/ui/AppText'
@@ -111,10 +112,14 @@ function ListOne({ onOpen }: { readonly onOpen: (listingId: string) => void }) {
   if (runs.finished.length === 0) return <Notice tone="attention" whatHappened={t('publish.noRun')} />
   return (
     <>
-      <Button kind="primary" label={t('listed.listOne')} onPress={() => setAsking(true)} />
+      <View style={styles.act}>
+        <Button kind="primary" label={t('listed.listOne')} onPress={() => setAsking(true)} />
+      </View>
       {isAsking ? (
         <ListBuildingDialog finished={runs.finished} onClose={() => setAsking(false)} onListed={onOpen} />
       ) : null}
     </>
   )
 }
+
+const styles = StyleSheet.create({ act: { flexDirection: 'row' } })
