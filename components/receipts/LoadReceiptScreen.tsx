@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useRouter } from 'expo-router'
+import { View } from 'react-native'
 import { MaterialName } from '@/components/runs/MaterialName'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { AppText } from '@/components/ui/AppText'
@@ -10,6 +11,7 @@ import { useMessages } from '@/components/ui/MessagesProvider'
 import { Panel } from '@/components/ui/Panel'
 import { Screen } from '@/components/ui/Screen'
 import { printPage } from '@/components/ui/web/printPage'
+import { webOnly } from '@/components/ui/web/webOnly'
 import type { LoadReceipt } from '@/shared/api/receipts'
 import { formatCount, formatDecimal, formatMass } from '@/shared/format'
 import { useApi } from '@/sync/react/SessionProvider'
@@ -52,7 +54,13 @@ function LoadedLoadReceipt({ publicationId, figure }: { readonly publicationId: 
       title={t('receipts.title')}
       subtitle={data ? `${data.publication.title} · ${data.publication.districtName}` : undefined}
       onBack={() => router.navigate(`/loads-ahead/${publicationId}`)}
-      right={printPage ? <Button kind="secondary" label={t('receipts.print')} onPress={printPage} /> : undefined}
+      right={
+        printPage ? (
+          <View {...webOnly({ dataSet: { printHide: '' } })}>
+            <Button kind="secondary" label={t('receipts.print')} onPress={printPage} />
+          </View>
+        ) : undefined
+      }
     >
       {read.error ? <ProblemNotice error={read.error} onRetry={() => void read.refetch()} /> : null}
       {data ? <LoadParts receipt={data} /> : read.error ? null : <AppText soft>{t('common.loading')}</AppText>}
