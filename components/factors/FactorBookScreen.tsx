@@ -1,7 +1,9 @@
 import { useQuery } from '@tanstack/react-query'
+import { useState } from 'react'
 import { ProblemNotice } from '@/components/runs/ProblemNotice'
 import { AppText } from '@/components/ui/AppText'
 import { Badge } from '@/components/ui/Badge'
+import { Button } from '@/components/ui/Button'
 import { DataTable } from '@/components/ui/DataTable'
 import { EmptyState } from '@/components/ui/EmptyState'
 import { useMessages } from '@/components/ui/MessagesProvider'
@@ -11,8 +13,10 @@ import { TitleBlock } from '@/components/ui/TitleBlock'
 import { formatDate } from '@/shared/format'
 import type { Edition } from '@/shared/schemas/factorBook'
 import { useApi } from '@/sync/react/SessionProvider'
+import { DraftTools } from './DraftTools'
 import { EditionParts } from './EditionParts'
 import { editionQuery, editionsQuery } from './factorQueries'
+import { NewDraftDialog } from './NewDraftDialog'
 
 interface FactorBookScreenProps {
   /** The edition of the address; the newest one when there is none. */
@@ -24,6 +28,7 @@ interface FactorBookScreenProps {
 export function FactorBookScreen({ editionId, onChoose }: FactorBookScreenProps) {
   const { t } = useMessages()
   const editions = useQuery(editionsQuery(useApi()))
+  const [isDrafting, setDrafting] = useState(false)
   const chosen = editions.data?.find((edition) => edition.editionId === editionId) ?? editions.data?.[0]
   return (
     <Screen title={t('factorBook.title')} width="full">
@@ -31,11 +36,22 @@ export function FactorBookScreen({ editionId, onChoose }: FactorBookScreenProps)
       {editions.error ? <ProblemNotice error={editions.error} onRetry={() => void editions.refetch()} /> : null}
       {editions.isPending ? <AppText soft>{t('common.loading')}</AppText> : null}
       {editions.data ? (
-        <Panel title={t('factorBook.editions')}>
+        <Panel
+          title={t('factorBook.editions')}
+          action={<Button kind="secondary" label={t('factorBook.newDraft')} onPress={() => setDrafting(true)} />}
+        >
           <EditionTable editions={editions.data} chosenId={chosen?.editionId ?? null} onChoose={onChoose} />
         </Panel>
       ) : null}
       {chosen ? <ChosenEdition key={chosen.editionId} edition={chosen} /> : null}
+      {isDrafting && editions.data ? (
+        <NewDraftDialog
+          editions={editions.data}
+          fromId={chosen?.editionId ?? null}
+          onClose={() => setDrafting(false)}
+          onMade={onChoose}
+        />
+      ) : null}
     </Screen>
   )
 }
@@ -86,6 +102,8 @@ function ChosenEdition({ edition }: { readonly edition: Edition }) {
     <>
       {full.error ? <ProblemNotice error={full.error} onRetry={() => void full.refetch()} /> : null}
       {full.isPending ? <AppText soft>{t('common.loading')}</AppText> : null}
+      {edition.note ? <AppText>{t('factorBook.noteOfEdition', { note: edition.note })}</AppText> : null}
+      {full.data?.state === 'draft' ? <DraftTools edition={full.data} /> : null}
       {full.data ? <EditionParts edition={full.data} /> : null}
       <TitleBlock
         cells={[

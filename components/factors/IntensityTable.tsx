@@ -11,6 +11,7 @@ import { Select } from '@/components/ui/Select'
 import { SPACE } from '@/components/ui/theme/tokens'
 import { downloadText } from '@/components/ui/web/downloadText'
 import { formatCount, formatDecimal, formatShare } from '@/shared/format'
+import { factorRowKey } from '@/shared/factorBook/factorRowKey'
 import type { Messages } from '@/shared/messages/messages.types'
 import type { IntensityRow } from '@/shared/schemas/factorBook'
 import { factorCsvRows } from './factorCsvRows'
@@ -21,10 +22,12 @@ import { sourceColumns } from './sourceColumns'
 interface IntensityTableProps {
   readonly rows: readonly IntensityRow[]
   readonly fileName: string
+  /** In a draft: opens a row to change it. */
+  readonly onChange?: ((row: IntensityRow) => void) | undefined
 }
 
 /** Kilograms per square metre, narrowed by structure, use and material. */
-export function IntensityTable({ rows, fileName }: IntensityTableProps) {
+export function IntensityTable({ rows, fileName, onChange }: IntensityTableProps) {
   const messages = useMessages()
   const { t } = messages
   const names = factorNames(messages)
@@ -58,6 +61,8 @@ export function IntensityTable({ rows, fileName }: IntensityTableProps) {
         rows={found}
         rowKey={({ rowId }) => rowId}
         columns={intensityColumns(messages)}
+        onPressRow={onChange}
+        rowLabel={(row) => t('factorBook.changeRow', { key: factorRowKey('intensities', row) })}
         empty={<EmptyState title={t('factorBook.noRows')} text={t('factorBook.noRowsText')} />}
         onSaveCsv={() => downloadText(fileName, csvText(factorCsvRows(found)), 'text/csv')}
       />

@@ -15,11 +15,13 @@ interface PartTableProps<Row> {
   readonly rows: readonly Row[]
   readonly columns: readonly Column<Row>[]
   readonly fileName: string
+  /** In a draft: opens a row to change it. */
+  readonly onChange?: ((row: Row) => void) | undefined
 }
 
 /** One part of an edition as a table. */
 export function PartTable<Row extends Flat<Row> & { readonly rowId: string }>(props: PartTableProps<Row>) {
-  const { title, note, rows, columns, fileName } = props
+  const { title, note, rows, columns, fileName, onChange } = props
   const { t } = useMessages()
   return (
     <Panel title={title} note={t('factorBook.count', { count: rows.length })}>
@@ -29,6 +31,7 @@ export function PartTable<Row extends Flat<Row> & { readonly rowId: string }>(pr
         rows={rows}
         rowKey={({ rowId }) => rowId}
         columns={columns}
+        {...(onChange ? { onPressRow: onChange, rowLabel: () => t('factorBook.changeRowTitle', { part: title }) } : {})}
         empty={<EmptyState title={t('factorBook.noRows')} />}
         onSaveCsv={() => downloadText(fileName, csvText(factorCsvRows(rows)), 'text/csv')}
       />
