@@ -10,6 +10,7 @@ import { FactorRowDialog } from './FactorRowDialog'
 import { IntensityTable } from './IntensityTable'
 import { densityColumns, lifetimeColumns, suspicionColumns, wasteCodeColumns } from './partColumns'
 import { PartTable } from './PartTable'
+import { PlausibilityPanel } from './PlausibilityPanel'
 
 /** The parts of an edition, one at a time; in a draft each row opens to be changed. */
 export function EditionParts({ edition }: { readonly edition: FullEdition }) {
@@ -37,6 +38,7 @@ export function EditionParts({ edition }: { readonly edition: FullEdition }) {
           <Button icon="plus" label={t('factorBook.addRow')} onPress={() => setOpen('new')} />
         </View>
       ) : null}
+      {part === 'intensities' ? <PlausibilityPanel rows={rows.intensities} /> : null}
       {part === 'intensities' ? (
         <IntensityTable rows={rows.intensities} fileName={fileName} onChange={onChange} />
       ) : null}
