@@ -56,6 +56,8 @@ export interface OutlineMapProps {
   readonly areas?: readonly MapArea[]
   readonly streets?: readonly MapStreet[]
   readonly userPosition?: MapPosition | null
+  /** Keeps the person in the middle as they walk. */
+  readonly followsUser?: boolean
   /** Offers "Draw an area"; called with the closed ring when the person is done. */
   readonly onDraw?: (area: Polygon) => void
   /** The map shows everything anew when this changes; else it stays where the person left it. */

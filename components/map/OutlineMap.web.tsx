@@ -148,7 +148,7 @@ function useCanvas(bounds: Bounds | null, onPress: (id: string | null, place: Po
 }
 
 function useFeatures(canvas: OutlineCanvas | null, props: OutlineMapProps, draft: readonly Position[] | null): void {
-  const { outlines, paint, selectedIds, areas, streets, userPosition = null } = props
+  const { outlines, paint, selectedIds, areas, streets, userPosition = null, followsUser = false } = props
   const { colours } = useTheme()
   useEffect(() => {
     canvas?.setFeatures('outlines', outlineFeatures(outlines, paint, colours.rule))
@@ -164,7 +164,8 @@ function useFeatures(canvas: OutlineCanvas | null, props: OutlineMapProps, draft
   }, [canvas, streets])
   useEffect(() => {
     canvas?.setPosition(userPosition)
-  }, [canvas, userPosition])
+    if (followsUser && userPosition) canvas?.centreOn(userPosition)
+  }, [canvas, userPosition, followsUser])
   useEffect(() => {
     canvas?.setDraft(draft ?? [])
   }, [canvas, draft])

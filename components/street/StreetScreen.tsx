@@ -4,6 +4,7 @@ import { MapLegend } from '@/components/map/MapLegend'
 import { OutlineMap } from '@/components/map/OutlineMap'
 import { AppText } from '@/components/ui/AppText'
 import { Button } from '@/components/ui/Button'
+import { CheckBox } from '@/components/ui/CheckBox'
 import { Choice } from '@/components/ui/Choice'
 import { EmptyState } from '@/components/ui/EmptyState'
 import { useMessages } from '@/components/ui/MessagesProvider'
@@ -62,7 +63,7 @@ function Street({ beats, current, onChoose, onOpenSheet }: StreetProps) {
   const buildings = useStored(useCallback((store: FieldStore) => store.listBuildings(beatId), [beatId]))
   const [view, setView] = useState<'map' | 'list'>('map')
   const [words, setWords] = useState('')
-  const { locating, position, locate } = useOwnPosition()
+  const { locating, position, locate, isFollowing, follow } = useOwnPosition()
   const ordered = useMemo(() => orderBuildings(buildings ?? [], position), [buildings, position])
   const found = ordered.filter(({ stored }) => fitsSearch(stored, words))
   const nearest = ordered.find(({ stored }) => stored.state === 'to-do')
@@ -86,6 +87,7 @@ function Street({ beats, current, onChoose, onOpenSheet }: StreetProps) {
       beatId={beatId}
       buildings={buildings ?? []}
       position={position}
+      followsUser={isFollowing}
       onOpenSheet={onOpenSheet}
     />
   )
@@ -135,6 +137,7 @@ function Street({ beats, current, onChoose, onOpenSheet }: StreetProps) {
             ]}
           />
         )}
+        <CheckBox label={t('street.follow')} checked={isFollowing} onChange={follow} />
         <WalkCaution />
         {locating === 'denied' || locating === 'failed' ? <AppText tone="attention">{says}</AppText> : null}
       </View>
@@ -159,10 +162,11 @@ interface BeatMapProps {
   readonly beatId: string
   readonly buildings: readonly StoredBuilding[]
   readonly position: ReturnType<typeof useOwnPosition>['position']
+  readonly followsUser: boolean
   readonly onOpenSheet: (buildingId: string) => void
 }
 
-function BeatMap({ label, beatId, buildings, position, onOpenSheet }: BeatMapProps) {
+function BeatMap({ label, beatId, buildings, position, followsUser, onOpenSheet }: BeatMapProps) {
   const { t } = useMessages()
   const { colours } = useTheme()
   const stateOf = useMemo(() => new Map(buildings.map(({ buildingId, state }) => [buildingId, state])), [buildings])
@@ -202,6 +206,7 @@ function BeatMap({ label, beatId, buildings, position, onOpenSheet }: BeatMapPro
       paint={paint}
       onPress={onOpenSheet}
       userPosition={position}
+      followsUser={followsUser}
       fitKey={`${beatId} ${buildings.length}`}
       overlay={<MapLegend title={t('street.state')} entries={entries} />}
     />
