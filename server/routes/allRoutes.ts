@@ -5,6 +5,7 @@ import { factorBookRoutes } from './factorBook/factorBookRoutes'
 import { healthRoutes } from './health/healthRoutes'
 import { nextLookRoutes } from './nextLook/nextLookRoutes'
 import { listingRoutes } from './listings/listingRoutes'
+import { openapiRoutes } from './openapi/openapiRoutes'
 import { outlineRoutes } from './outlines/outlineRoutes'
 import { peopleRoutes } from './people/peopleRoutes'
 import { photoRoutes } from './photos/photoRoutes'
@@ -35,4 +36,5 @@ export const allRoutes: readonly ((context: Context) => Router)[] = [
   publicationRoutes,
   yardRoutes,
   listingRoutes,
+  openapiRoutes,
 ]

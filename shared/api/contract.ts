@@ -4,6 +4,7 @@ import * as factorBook from './factorBook'
 import * as health from './health'
 import * as nextLook from './nextLook'
 import * as listings from './listings'
+import * as openapi from './openapi'
 import * as outlines from './outlines'
 import * as people from './people'
 import * as publications from './publications'
@@ -34,6 +35,7 @@ export const contract: Readonly<Record<string, Endpoint>> = Object.freeze(
       nextLook,
       receipts,
       health,
+      openapi,
     ].flatMap((resource) => Object.entries(resource).filter(([, value]) => isEndpoint(value))),
   ) as Record<string, Endpoint>,
 )
