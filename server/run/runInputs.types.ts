@@ -3,7 +3,7 @@ import type { Scenario } from '@/shared/schemas/run'
 import type { SheetSlice } from '@/shared/schemas/sliceSheet'
 
 /** Version of the computation; it changes when equal inputs would give other results. */
-export const ENGINE_VERSION = '1.0.0'
+export const ENGINE_VERSION = '1.1.0'
 
 /** A checked sheet as it stood when the run was started. */
 export interface RunSheet {

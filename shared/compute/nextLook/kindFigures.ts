@@ -3,6 +3,7 @@ import type { IntensityFigure } from '@/shared/compute/factors/intensity.types'
 import { makeChanceBook, type ChanceBook } from '@/shared/compute/run/chanceBook'
 import { resolveArchetype, type LifetimeFigure, type ResolvedArchetype } from '@/shared/compute/run/resolveArchetype'
 import type { BuildingCell } from '@/shared/compute/run/run.types'
+import { spreadByFactor } from '@/shared/compute/run/spreadByFactor'
 import type { KindFigure, LookFigure, PossibleKind } from './nextLook.types'
 
 export interface KindConventions {
@@ -61,19 +62,16 @@ export function kindFigures(
 }
 
 function contentOf({ factors }: ResolvedArchetype, { material }: LookFigure) {
-  const sdByFactor = new Map<string, number>()
+  const spreads = spreadByFactor(factors.filter((factor) => material === 'all' || factor.material === material))
   let [contentKgPerM2, betweenVariance] = [0, 0]
-  for (const factor of factors) {
-    if (material !== 'all' && factor.material !== material) continue
-    contentKgPerM2 += factor.meanKgPerM2
-    betweenVariance += (factor.meanKgPerM2 * factor.betweenBuildingsCv) ** 2
-    const sd = factor.meanKgPerM2 * factor.sharedCv
-    sdByFactor.set(factor.factorId, (sdByFactor.get(factor.factorId) ?? 0) + sd)
+  for (const { meanKgPerM2, betweenSdKgPerM2 } of spreads) {
+    contentKgPerM2 += meanKgPerM2
+    betweenVariance += betweenSdKgPerM2 ** 2
   }
   return {
     contentKgPerM2,
     betweenVariance,
-    factors: [...sdByFactor].map(([factorId, sdKgPerM2]) => ({ factorId, sdKgPerM2 })),
+    factors: spreads.map(({ factorId, sdKgPerM2 }) => ({ factorId, sdKgPerM2 })),
   }
 }
 

@@ -1,4 +1,5 @@
 import type { Material } from '@/shared/compute/factors/vocabulary'
+import { spreadByFactor } from './spreadByFactor'
 import type { Archetype, BuildingCell, MassEstimate, VarianceByCause } from './run.types'
 
 export interface StockEstimate {
@@ -20,7 +21,7 @@ export interface AreaSums {
  *
  *     Var M = Σ_f [ F̄²·Var ΣA + Var F·(ΣA)² + Var F·Var ΣA ] + Σ_i (A_i F̄ cv_b)²
  *
- * with f over the factors. Materials have factors of their own; the error of an area is common to all
+ * with f over the factors; the parts over which one figure is split by component err together. Materials have factors of their own; the error of an area is common to all
  * materials of a building, which is why the total is not the sum of the material variances.
  *
  * @example
@@ -68,29 +69,22 @@ function estimate(
 ): MassEstimate {
   let meanKg = 0
   let measurement = 0
-  const areaByFactor = new Map<string, { areaM2: number; areaVarianceM4: number; sdKgPerM2: number }>()
+  let factor = 0
+  const exposureByFactor = new Map<string, number>()
   archetypes.forEach((archetype, index) => {
     const { floorAreaM2, floorAreaSquaredM4, floorAreaVarianceM4 } = sums[index]!
     let intensity = 0
-    for (const factor of archetype.factors) {
-      if (!counts(factor.material)) continue
-      intensity += factor.meanKgPerM2
-      measurement += (floorAreaSquaredM4 + floorAreaVarianceM4) * (factor.meanKgPerM2 * factor.betweenBuildingsCv) ** 2
-      const shared = areaByFactor.get(factor.factorId) ?? {
-        areaM2: 0,
-        areaVarianceM4: 0,
-        sdKgPerM2: factor.meanKgPerM2 * factor.sharedCv,
-      }
-      shared.areaM2 += floorAreaM2
-      shared.areaVarianceM4 += floorAreaVarianceM4
-      areaByFactor.set(factor.factorId, shared)
+    const counted = archetype.factors.filter(({ material }) => counts(material))
+    for (const { factorId, meanKgPerM2, sdKgPerM2, betweenSdKgPerM2 } of spreadByFactor(counted)) {
+      intensity += meanKgPerM2
+      measurement += (floorAreaSquaredM4 + floorAreaVarianceM4) * betweenSdKgPerM2 ** 2
+      exposureByFactor.set(factorId, (exposureByFactor.get(factorId) ?? 0) + sdKgPerM2 * floorAreaM2)
+      factor += sdKgPerM2 ** 2 * floorAreaVarianceM4
     }
     meanKg += floorAreaM2 * intensity
     measurement += floorAreaVarianceM4 * intensity ** 2
   })
-  let factor = 0
-  for (const { areaM2, areaVarianceM4, sdKgPerM2 } of areaByFactor.values())
-    factor += sdKgPerM2 ** 2 * (areaM2 ** 2 + areaVarianceM4)
+  for (const exposure of exposureByFactor.values()) factor += exposure ** 2
   return { meanKg, varianceByCauseKg2: { measurement, factor, lifetime: 0, chance: 0 } }
 }
 

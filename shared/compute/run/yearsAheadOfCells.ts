@@ -1,7 +1,8 @@
 import type { Component, Material } from '@/shared/compute/factors/vocabulary'
 import { makeChanceBook, type ChanceBook } from './chanceBook'
 import { lifetimeDoubt } from './lifetimeDoubt'
-import type { Archetype, BuildingCell, VarianceByCause, YearsAheadConventions } from './run.types'
+import type { Archetype, BuildingCell, FactorUse, VarianceByCause, YearsAheadConventions } from './run.types'
+import { spreadByFactor } from './spreadByFactor'
 
 /** Mean [kg/yr] and variance by cause [kg²/yr²], entry k for survey year + 1 + k. */
 export interface FlowEstimate {
@@ -191,13 +192,13 @@ function estimateFlow(
       chance: new Float64Array(length),
     },
   }
-  const areaByFactor = new Map<string, { sdKgPerM2: number; floorArea: Float64Array }>()
+  const exposureByFactor = new Map<string, Float64Array>()
   const swingByLife = new Map<string, Swing>()
   archetypes.forEach((archetype, index) => {
-    for (const group of groupBySums(archetype, index, sumsOf, counts)) addGroup(flow, areaByFactor, swingByLife, group)
+    for (const group of groupBySums(archetype, index, sumsOf, counts))
+      addGroup(flow, exposureByFactor, swingByLife, group)
   })
-  for (const { sdKgPerM2, floorArea } of areaByFactor.values())
-    addSquares(flow.varianceByCauseKg2.factor, floorArea, sdKgPerM2)
+  for (const exposure of exposureByFactor.values()) addSquares(flow.varianceByCauseKg2.factor, exposure)
   for (const swing of swingByLife.values()) {
     for (let k = 0; k < length; k++) {
       const { shiftKg, varianceKg2 } = lifetimeDoubt(swing.given[k]!, swing.shorter[k]!, swing.longer[k]!)
@@ -217,10 +218,7 @@ interface Swing {
 
 interface Group {
   readonly sums: FlowSums
-  intensity: number
-  intensityVariance: number
-  betweenVariance: number
-  readonly factors: { readonly factorId: string; readonly sdKgPerM2: number }[]
+  readonly factors: FactorUse[]
 }
 
 /** Factors of an archetype that share one set of sums: all of them for demolition, those of a component for renewal. */
@@ -234,26 +232,28 @@ function groupBySums(
   for (const factor of archetype.factors) {
     const sums = counts(factor.material) ? sumsOf(index, factor.component) : undefined
     if (!sums) continue
-    let group = groups.get(sums)
-    if (!group)
-      groups.set(sums, (group = { sums, intensity: 0, intensityVariance: 0, betweenVariance: 0, factors: [] }))
-    const sdKgPerM2 = factor.meanKgPerM2 * factor.sharedCv
-    group.intensity += factor.meanKgPerM2
-    group.intensityVariance += sdKgPerM2 ** 2
-    group.betweenVariance += (factor.meanKgPerM2 * factor.betweenBuildingsCv) ** 2
-    group.factors.push({ factorId: factor.factorId, sdKgPerM2 })
+    const group = groups.get(sums) ?? { sums, factors: [] }
+    group.factors.push(factor)
+    groups.set(sums, group)
   }
   return [...groups.values()]
 }
 
 function addGroup(
   flow: FlowEstimate,
-  areaByFactor: Map<string, { sdKgPerM2: number; floorArea: Float64Array }>,
+  exposureByFactor: Map<string, Float64Array>,
   swingByLife: Map<string, Swing>,
   group: Group,
 ): void {
-  const { sums, intensity, intensityVariance, betweenVariance } = group
+  const { sums } = group
   const length = flow.meanKg.length
+  const spreads = spreadByFactor(group.factors)
+  let [intensity, intensityVariance, betweenVariance] = [0, 0, 0]
+  for (const { meanKgPerM2, sdKgPerM2, betweenSdKgPerM2 } of spreads) {
+    intensity += meanKgPerM2
+    intensityVariance += sdKgPerM2 ** 2
+    betweenVariance += betweenSdKgPerM2 ** 2
+  }
   const { measurement, chance } = flow.varianceByCauseKg2
   let swing = swingByLife.get(sums.lifeId)
   if (!swing)
@@ -273,15 +273,15 @@ function addGroup(
     swing.shorter[k]! += intensity * sums.floorAreaIfShorter[k]!
     swing.longer[k]! += intensity * sums.floorAreaIfLonger[k]!
   }
-  for (const { factorId, sdKgPerM2 } of group.factors) {
-    let shared = areaByFactor.get(factorId)
-    if (!shared) areaByFactor.set(factorId, (shared = { sdKgPerM2, floorArea: new Float64Array(length) }))
-    for (let k = 0; k < length; k++) shared.floorArea[k]! += sums.floorArea[k]!
+  for (const { factorId, sdKgPerM2 } of spreads) {
+    let exposure = exposureByFactor.get(factorId)
+    if (!exposure) exposureByFactor.set(factorId, (exposure = new Float64Array(length)))
+    for (let k = 0; k < length; k++) exposure[k]! += sdKgPerM2 * sums.floorArea[k]!
   }
 }
 
-function addSquares(variance: Float64Array, amount: Float64Array, scale: number): void {
-  for (let k = 0; k < variance.length; k++) variance[k]! += (scale * amount[k]!) ** 2
+function addSquares(variance: Float64Array, amount: Float64Array): void {
+  for (let k = 0; k < variance.length; k++) variance[k]! += amount[k]! ** 2
 }
 
 function addUp(lists: readonly Float64Array[], length: number): Float64Array {
