@@ -115,12 +115,13 @@ function Photo({
 }
 
 function Answers({ sheet }: { readonly sheet: ReviewSheet }) {
-  const { t, locale } = useMessages()
+  const messages = useMessages()
+  const { t } = messages
   return (
     <Panel title={t('review.answers')} grow>
       <DataTable
         label={t('review.answers')}
-        rows={answerLines(sheet, t, locale)}
+        rows={answerLines(sheet, messages)}
         rowKey={(line) => line.key}
         columns={[
           { key: 'what', head: t('review.what'), cell: (line) => line.label },

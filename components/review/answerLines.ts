@@ -1,7 +1,8 @@
 import type { ReviewSheet } from '@/shared/api/review'
-import { formatArea, formatDecimal, formatShare } from '@/shared/format'
+import { formatArea } from '@/shared/format'
 import type { Messages } from '@/shared/messages/messages.types'
-import type { ConstructionYear, KnownBy, SheetAnswers } from '@/shared/schemas/sheet'
+import type { SheetAnswers } from '@/shared/schemas/sheet'
+import { answerWords, type AnswerWords } from './answerWords'
 
 export interface AnswerLine {
   readonly key: string
@@ -10,44 +11,61 @@ export interface AnswerLine {
   readonly known: string
 }
 
-type Group = keyof SheetAnswers
-type Words<Key extends Group> = (answer: NonNullable<SheetAnswers[Key]>) => string
+type Group = keyof AnswerWords
 
-/** A sheet's answers in words, each with how it is known; what the register says stands beside it. */
-export function answerLines(
-  { answers, outline, grossFloorAreaM2 }: ReviewSheet,
-  t: Messages['t'],
-  locale: string,
-): AnswerLine[] {
+/** Groups every sheet of a standing building answers, also when they are not answered. */
+const ALWAYS: readonly Group[] = [
+  'finding',
+  'use',
+  'structure',
+  'storeys',
+  'footprint',
+  'attic',
+  'basement',
+  'constructionYear',
+  'condition',
+  'vacancy',
+  'protection',
+]
+/** Groups that are shown where somebody answered them. */
+const WHERE_ANSWERED: readonly Group[] = [
+  'parts',
+  'heights',
+  'roof',
+  'facade',
+  'openings',
+  'refurbishments',
+  'permitNotice',
+  'suspicions',
+  'notes',
+]
+
+/**
+ * A sheet's answers in words, each with how it is known; what the register says stands beside it, and what nobody has
+ * confirmed is said to be so.
+ */
+export function answerLines({ answers, outline, grossFloorAreaM2 }: ReviewSheet, messages: Messages): AnswerLine[] {
+  const { t, locale } = messages
+  const words = answerWords(messages)
   const register = outline?.register
-  const line = <Key extends Group>(key: Key, words: Words<Key>, said?: string | null): AnswerLine => {
-    const answer = answers[key]
-    const value = answer === undefined ? t('common.notAnswered') : words(answer as NonNullable<SheetAnswers[Key]>)
+  const said: Partial<Record<Group, string | undefined>> = {
+    use: register?.use ? t(`vocabulary.use.${register.use}`) : undefined,
+    storeys: register?.storeys?.toString(),
+    constructionYear: register?.year?.toString(),
+  }
+  const lineOf = (key: Group): AnswerLine => {
+    const value = valueOf(key, answers, words) ?? t('common.notAnswered')
+    const registerSays = said[key]
     return {
       key,
       label: t(`review.group.${key}`),
-      value: said ? `${value} (${t('review.registerSays', { said })})` : value,
-      known: knownText(answer, t),
+      value: registerSays ? `${value} (${t('review.registerSays', { said: registerSays })})` : value,
+      known: knownText(answers[key], t),
     }
   }
-  const share = (value: number | null) => (value === null ? t('common.notKnown') : formatShare(value, locale))
   return [
-    line('finding', (answer) => t(`vocabulary.finding.${answer.kind}`)),
-    line('use', (answer) => t(`vocabulary.use.${answer.use}`), register?.use && t(`vocabulary.use.${register.use}`)),
-    line('structure', (answer) => t(`vocabulary.structure.${answer.structure}`)),
-    line(
-      'storeys',
-      (answer) => (answer.aboveGround === null ? t('common.notKnown') : formatDecimal(answer.aboveGround, locale, 1)),
-      register?.storeys?.toString(),
-    ),
-    line('footprint', (answer) => formatArea(answer.footprintM2, locale)),
-    line('attic', (answer) => share(answer.floorShare)),
-    line('basement', (answer) => share(answer.floorShare)),
-    line('constructionYear', (answer) => yearText(answer, t), register?.year?.toString()),
-    line('condition', (answer) => t(`vocabulary.condition.${answer.condition}`)),
-    line('vacancy', (answer) => t(`vocabulary.vacancy.${answer.vacancy}`)),
-    line('protection', (answer) => (answer.isProtected ? t('common.yes') : t('common.no'))),
-    line('notes', (answer) => answer.text),
+    ...ALWAYS.map(lineOf),
+    ...WHERE_ANSWERED.filter((key) => answers[key] !== undefined).map(lineOf),
     {
       key: 'floorArea',
       label: t('review.floorArea'),
@@ -57,12 +75,15 @@ export function answerLines(
   ]
 }
 
-function knownText(answer: SheetAnswers[Group], t: Messages['t']): string {
-  const by = answer && 'knownBy' in answer ? (answer.knownBy as KnownBy | undefined) : undefined
-  return by ? t(`vocabulary.knownBy.${by}`) : ''
+function valueOf<Key extends Group>(key: Key, answers: SheetAnswers, words: AnswerWords): string | undefined {
+  const answer = answers[key]
+  return answer === undefined ? undefined : words[key](answer)
 }
 
-function yearText(year: ConstructionYear, t: Messages['t']): string {
-  if (year.kind === 'exact') return String(year.year)
-  return year.kind === 'between' ? `${year.fromYear}–${year.toYear}` : t('common.notKnown')
+function knownText(answer: SheetAnswers[Group], t: Messages['t']): string {
+  if (answer === undefined) return ''
+  const by = 'knownBy' in answer && answer.knownBy !== undefined ? [t(`vocabulary.knownBy.${answer.knownBy}`)] : []
+  const open =
+    'unconfirmed' in answer && answer.unconfirmed !== undefined ? [t(`review.unconfirmed.${answer.unconfirmed}`)] : []
+  return [...by, ...open].join(', ')
 }
