@@ -4,6 +4,7 @@ import { AppText } from '@/components/ui/AppText'
 import { Button } from '@/components/ui/Button'
 import { Choice } from '@/components/ui/Choice'
 import { useMessages } from '@/components/ui/MessagesProvider'
+import { Notice } from '@/components/ui/Notice'
 import { FACTOR_PARTS, type FactorPart } from '@/shared/factorBook/factorColumns'
 import type { FullEdition } from '@/shared/schemas/factorBook'
 import { FactorRowDialog } from './FactorRowDialog'
@@ -33,6 +34,9 @@ export function EditionParts({ edition }: { readonly edition: FullEdition }) {
         onChange={setPart}
       />
       <AppText soft>{t('factorBook.fromMemoryNote')}</AppText>
+      {part === 'densities' || part === 'wasteCodes' || part === 'suspicions' ? (
+        <Notice tone="attention" whatHappened={t('factorBook.ownTablesNote')} />
+      ) : null}
       {isDraft ? (
         <View style={styles.row}>
           <Button icon="plus" label={t('factorBook.addRow')} onPress={() => setOpen('new')} />

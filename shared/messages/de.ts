@@ -4,6 +4,7 @@ import cautions from './de/cautions.json'
 import common from './de/common.json'
 import comparison from './de/comparison.json'
 import district from './de/district.json'
+import factorBook from './de/factorBook.json'
 import listed from './de/listed.json'
 import loads from './de/loads.json'
 import mail from './de/mail.json'
@@ -31,6 +32,7 @@ export const de = {
   common,
   comparison,
   district,
+  factorBook,
   listed,
   loads,
   mail,
