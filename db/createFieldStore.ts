@@ -42,7 +42,9 @@ export function createFieldStore(parts: FieldStoreParts): FieldStore {
     subscribe,
     async listBeats() {
       const rows = await driver.all<BaseRow>("SELECT id, change_no, fields FROM base WHERE type = 'beat' ORDER BY id")
-      return rows.map((row) => ({ beatId: row.id, beat: readColumn.beat(row.fields) }))
+      return rows
+        .map((row) => ({ beatId: row.id, beat: readColumn.beat(row.fields) }))
+        .sort(({ beat: one }, { beat: other }) => other.startsOn.localeCompare(one.startsOn))
     },
     listBuildings: (beatId) => readBuildings(driver, 'beat_id = ?', beatId),
     readBuilding: async (buildingId) => (await readBuildings(driver, 'building_id = ?', buildingId))[0] ?? null,

@@ -2,6 +2,7 @@ import { useCallback, useMemo, useState } from 'react'
 import { ScrollView, StyleSheet, View } from 'react-native'
 import { MapLegend } from '@/components/map/MapLegend'
 import { OutlineMap } from '@/components/map/OutlineMap'
+import { useChosenBeat } from '@/components/field/useChosenBeat'
 import { AppText } from '@/components/ui/AppText'
 import { Button } from '@/components/ui/Button'
 import { CheckBox } from '@/components/ui/CheckBox'
@@ -37,9 +38,14 @@ const listBeats = (store: FieldStore) => store.listBeats()
 export function StreetScreen({ onOpenSheet }: StreetScreenProps) {
   const { t } = useMessages()
   const beats = useStored(listBeats)
-  const [chosen, setChosen] = useState<string | null>(null)
-  const current = beats?.find(({ beatId }) => beatId === chosen) ?? beats?.[0]
-  if (!beats) return <Screen title={t('street.title')}>{null}</Screen>
+  const { current, choose } = useChosenBeat(beats)
+  if (!beats) {
+    return (
+      <Screen title={t('street.title')}>
+        <AppText soft>{t('common.loading')}</AppText>
+      </Screen>
+    )
+  }
   if (!current) {
     return (
       <Screen title={t('street.title')}>
@@ -47,7 +53,7 @@ export function StreetScreen({ onOpenSheet }: StreetScreenProps) {
       </Screen>
     )
   }
-  return <Street beats={beats} current={current} onChoose={setChosen} onOpenSheet={onOpenSheet} />
+  return <Street beats={beats} current={current} onChoose={choose} onOpenSheet={onOpenSheet} />
 }
 
 interface StreetProps extends StreetScreenProps {
@@ -122,7 +128,10 @@ function Street({ beats, current, onChoose, onOpenSheet }: StreetProps) {
             label={t('street.beat')}
             value={beatId}
             onChange={onChoose}
-            options={beats.map((one) => ({ value: one.beatId, label: one.beat.name }))}
+            options={beats.map((one) => ({
+              value: one.beatId,
+              label: t('today.beatOption', { beat: one.beat.name, round: one.beat.roundName }),
+            }))}
           />
         ) : null}
         {isWide ? null : (

@@ -1,6 +1,7 @@
 import { useCallback, useState } from 'react'
 import { StyleSheet, View } from 'react-native'
 import { BeatWall } from '@/components/charts/BeatWall'
+import { useChosenBeat } from '@/components/field/useChosenBeat'
 import { AppText } from '@/components/ui/AppText'
 import { Badge } from '@/components/ui/Badge'
 import { Button } from '@/components/ui/Button'
@@ -30,11 +31,10 @@ const listBeats = (store: FieldStore) => store.listBeats()
 export function TodayScreen(props: TodayScreenProps) {
   const { t } = useMessages()
   const beats = useStored(listBeats)
-  const [chosen, setChosen] = useState<string | null>(null)
+  const { current, choose } = useChosenBeat(beats)
   if (!beats) return <Screen title={t('today.title')}>{null}</Screen>
-  const current = beats.find(({ beatId }) => beatId === chosen) ?? beats[0]
   if (!current) return <NoBeat />
-  return <TodayOfBeat {...props} beats={beats} current={current} onChoose={setChosen} />
+  return <TodayOfBeat {...props} beats={beats} current={current} onChoose={choose} />
 }
 
 function NetworkBadge() {
@@ -85,7 +85,10 @@ function TodayOfBeat({ beats, current, onChoose, onOpenSheet, onOpenStreet, onOp
           label={t('today.beat')}
           value={beatId}
           onChange={onChoose}
-          options={beats.map((one) => ({ value: one.beatId, label: one.beat.name }))}
+          options={beats.map((one) => ({
+            value: one.beatId,
+            label: t('today.beatOption', { beat: one.beat.name, round: one.beat.roundName }),
+          }))}
         />
       ) : null}
       <Panel

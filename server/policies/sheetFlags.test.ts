@@ -24,6 +24,11 @@ const plain: FlagBasis = {
 const answering = (change: SheetAnswers): FlagBasis => ({ ...plain, answers: { ...answers, ...change } })
 
 const cases: [Flag, string, FlagBasis][] = [
+  [
+    'not-confirmed',
+    'the storeys stand as the register has them',
+    answering({ storeys: { aboveGround: 2, knownBy: 'register', unconfirmed: 'register' } }),
+  ],
   ['photo-missing', 'there is none', { ...plain, photoCount: 0 }],
   ['far-from-outline', 'the position is 80 m away', { ...plain, distanceM: 80 }],
   [

@@ -58,6 +58,7 @@ const checks: Readonly<Record<Flag, (basis: FlagBasis) => boolean>> = {
   'storeys-contradict-height': contradictsHeight,
   'conflict-open': ({ openConflictCount }) => openConflictCount > 0,
   'much-not-known': ({ answers }) => isStanding(answers) && countNotKnown(answers) >= MUCH_NOT_KNOWN,
+  'not-confirmed': ({ answers }) => Object.values(answers).some(isUnconfirmed),
 }
 
 /** What a planner should look at first, in the order of the contract. A flag is a question, never a verdict. */
@@ -65,6 +66,11 @@ export function sheetFlags(basis: FlagBasis): Flag[] {
   return FLAG_ORDER.filter((flag) => checks[flag](basis))
 }
 const FLAG_ORDER = Object.keys(checks).filter((name): name is Flag => name in checks)
+
+/** Taken over from the register or the last building, and looked at by nobody. */
+function isUnconfirmed(answer: object | undefined): boolean {
+  return answer !== undefined && 'unconfirmed' in answer && answer.unconfirmed !== undefined
+}
 
 function isStanding({ finding }: SheetAnswers): boolean {
   return (finding?.kind ?? 'standing') === 'standing'

@@ -15,6 +15,7 @@ export const FLAGS = [
   'storeys-contradict-height',
   'conflict-open',
   'much-not-known',
+  'not-confirmed',
 ] as const
 export const flag = z.enum(FLAGS)
 export type Flag = z.infer<typeof flag>
