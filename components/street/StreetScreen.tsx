@@ -83,8 +83,14 @@ function Street({ beats, current, onChoose, onOpenSheet }: StreetProps) {
   const list = (
     <View style={styles.list}>
       <TextField label={t('street.search')} hint={t('street.searchHint')} value={words} onChange={setWords} />
-      <AppText soft>{`${t('street.found', { count: found.length })} · ${says}`}</AppText>
-      <BuildingList buildings={found} onOpen={onOpenSheet} />
+      {buildings ? (
+        <>
+          <AppText soft>{`${t('street.found', { count: found.length })} · ${says}`}</AppText>
+          <BuildingList buildings={found} onOpen={onOpenSheet} />
+        </>
+      ) : (
+        <AppText soft>{t('common.loading')}</AppText>
+      )}
     </View>
   )
   const map = (
