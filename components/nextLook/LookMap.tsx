@@ -52,7 +52,7 @@ export function LookMap({ districtId, districtName, ranked: { looks, figure } }:
   return (
     <Panel title={t('nextLook.map', { figure: lookFigureText(figure, t) })} flush>
       <OutlineMap
-        label={t('nextLook.map', { figure: lookFigureText(figure, t) })}
+        label={t('district.plainMapLabel', { district: districtName })}
         outlines={outlines}
         paint={paint}
         heightPx={HEIGHT_PX}

@@ -122,7 +122,7 @@ async function shareOut(planner: Page, surveyor: string): Promise<void> {
   await dialog.getByRole('button', { name: 'Open the round' }).click()
   await expect(planner.getByRole('heading', { name: 'First look' })).toBeVisible()
   await planner.getByRole('button', { name: 'Select all without a beat' }).click()
-  await planner.getByRole('textbox', { name: 'Beat' }).fill('Along the canal')
+  await planner.getByRole('textbox', { name: 'Beat', exact: true }).fill('Along the canal')
   await planner.getByRole('combobox', { name: 'Surveyor' }).selectOption(surveyor)
   await planner.getByRole('button', { name: 'Make a beat' }).click()
   await expect(planner.getByText(/is kept\./)).toBeVisible()
