@@ -73,7 +73,10 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
         contentContainerStyle={styles.wide}
         onLayout={(event) => setWidthPx(event.nativeEvent.layout.width)}
         onContentSizeChange={setContentPx}
-        {...webOnly({ dataSet: { printFlow: '' }, ...(Math.max(contentPx, leastWidth) > widthPx ? { tabIndex: 0 } : {}) })}
+        {...webOnly({
+          dataSet: { printFlow: '' },
+          ...(Math.max(contentPx, leastWidth) > widthPx ? { tabIndex: 0 } : {}),
+        })}
       >
         <View
           role="table"
